@@ -1,0 +1,2 @@
+//! The browser entry: mounts the page.
+fn main() {}
