@@ -1,1 +1,25 @@
-//! placeholder
+//! Fills what is missing. Every filled value is marked as assumed; entered values pass as they are.
+
+use crate::quantity::WireSize;
+use crate::sheet::Choice;
+use crate::working::{Amount, Place};
+
+/// A value filled in for a field.
+#[derive(Debug, Clone, PartialEq)]
+pub enum AssumedValue {
+    /// A quantity or count.
+    Amount(Amount),
+    /// An answer.
+    Choice(Choice),
+    /// A conductor size.
+    Size(WireSize),
+}
+
+/// An assumption: which field was filled with what. `words` gives the reason for each field.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Assumption {
+    /// The field.
+    pub place: Place,
+    /// The value.
+    pub value: AssumedValue,
+}

@@ -48,6 +48,8 @@ pub enum Form {
         /// The symbols of the expression, in the order of the terms.
         symbols: &'static [&'static str],
     },
+    /// The sum of all terms, however many.
+    Sum,
     /// A value taken from a published table.
     Lookup,
     /// A choice among values by comparison.

@@ -1,0 +1,1 @@
+//! Rules cited by the choices; filled below.
