@@ -177,7 +177,11 @@ fn bind(wasm: &Path) -> Result<Program, Complaint> {
     binding.no_modules(true).map_err(complain)?;
     let mut output = binding.generate_output().map_err(complain)?;
     // A crate that carries scripts of its own needs modules, which cannot be loaded from a disk.
-    if !output.snippets().is_empty() || !output.local_modules().is_empty() {
+    let carries_scripts = output
+        .snippets()
+        .values()
+        .any(|scripts| !scripts.is_empty());
+    if carries_scripts || !output.local_modules().is_empty() {
         return Err(Complaint::Glue(
             "a crate carries scripts of its own, which one file cannot hold".to_owned(),
         ));

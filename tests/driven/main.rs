@@ -1,0 +1,1 @@
+//! Tests which drive the packed page in a real browser.
