@@ -1,0 +1,195 @@
+//! Alternating-current circuits: currents, voltage drop, reactors, point-to-point fault currents.
+
+use crate::quantity::{
+    ApparentPower, Current, Frequency, ImpedancePerLength, Inductance, Length, LengthPerImpedance,
+    Quantity, Ratio, ShaftPower, Voltage,
+};
+use core::f64::consts::PI;
+
+/// Square root of three: line quantities of a balanced three-phase circuit.
+pub const SQRT_3: f64 = 1.732_050_807_568_877_2;
+
+/// The number of phases of a circuit, as far as the formulas differ.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
+pub enum Phases {
+    /// Two wires, between lines.
+    Single,
+    /// Balanced three-phase.
+    Three,
+}
+
+impl Phases {
+    /// Apparent power for voltage and current: 1, or the square root of three.
+    fn power_factor_of_lines(self) -> f64 {
+        match self {
+            Phases::Single => 1.0,
+            Phases::Three => SQRT_3,
+        }
+    }
+
+    /// Conductor lengths which a drop or a fault between lines sees for a one-way length: 2, or the square root of three.
+    fn lengths_of_lines(self) -> f64 {
+        match self {
+            Phases::Single => 2.0,
+            Phases::Three => SQRT_3,
+        }
+    }
+}
+
+/// Apparent power of a circuit.
+///
+/// S = sqrt(3) * U * I for three phases, U * I for one; U voltage between lines, I line current.
+pub fn apparent_power(phases: Phases, voltage: Voltage, current: Current) -> ApparentPower {
+    phases.power_factor_of_lines() * (voltage * current)
+}
+
+/// Full-load current of a transformer's winding.
+///
+/// I = S / (sqrt(3) * U) for three phases, S / U for one; S rated power, U voltage between lines.
+pub fn transformer_current(phases: Phases, power: ApparentPower, voltage: Voltage) -> Current {
+    Current::amperes(
+        power.to_volt_amperes() / (phases.power_factor_of_lines() * voltage.to_volts()),
+    )
+}
+
+/// Line current which a drive takes to give a motor its rated power.
+///
+/// I = P / (eta_m * eta_d * sqrt(3) * U * lambda); P shaft power, eta efficiencies of motor and drive, U voltage between
+/// lines, lambda true power factor at the drive's input.
+pub fn drive_input_current(
+    power: ShaftPower,
+    voltage: Voltage,
+    motor_efficiency: Ratio,
+    drive_efficiency: Ratio,
+    power_factor: Ratio,
+) -> Current {
+    let efficiency = motor_efficiency.to_one() * drive_efficiency.to_one();
+    Current::amperes(
+        power.to_watts() / (efficiency * SQRT_3 * voltage.to_volts() * power_factor.to_one()),
+    )
+}
+
+/// A conductor run as the drop sees it.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct DropRun {
+    /// Resistance of one conductor at its working temperature.
+    pub resistance: ImpedancePerLength,
+    /// Reactance of one conductor.
+    pub reactance: ImpedancePerLength,
+    /// Length one way.
+    pub length: Length,
+    /// Conductors in parallel.
+    pub sets: u32,
+}
+
+/// Voltage drop between lines along a run.
+///
+/// dU = sqrt(3) * I * (R * cosphi + X * sinphi) * L / n for three phases, 2 instead of sqrt(3) for one; I line current,
+/// R and X resistance and reactance of one conductor for its length, L length one way, n conductors in parallel.
+/// The usual approximation of the exact difference of magnitudes; it leaves out the angle between the two ends.
+/// Source: NEC 2023, Chapter 9, Table 9, note 2.
+pub fn voltage_drop(
+    phases: Phases,
+    current: Current,
+    power_factor: Ratio,
+    run: DropRun,
+) -> Voltage {
+    let cosphi = power_factor.to_one();
+    let sinphi = reactive_factor(power_factor).to_one();
+    let effective =
+        run.resistance.to_ohms_per_metre() * cosphi + run.reactance.to_ohms_per_metre() * sinphi;
+    Voltage::volts(
+        phases.lengths_of_lines() * current.to_amperes() * effective * run.length.to_metres()
+            / f64::from(run.sets),
+    )
+}
+
+/// Sine of the angle whose cosine is the power factor.
+///
+/// sinphi = sqrt(1 - cosphi * cosphi).
+pub fn reactive_factor(power_factor: Ratio) -> Ratio {
+    let cosphi = power_factor.to_one();
+    Ratio::of_one((1.0 - cosphi * cosphi).max(0.0).sqrt())
+}
+
+/// Conductor area which keeps a drop, by the constant K of the metal.
+///
+/// A = sqrt(3) * K * I * L / dU for three phases, 2 instead of sqrt(3) for one; K in ohm circular mils a foot, I in
+/// amperes, L one way in feet, dU in volts: circular mils. K is 12.9 for copper at 75 °C.
+pub fn circular_mils_for_drop(
+    phases: Phases,
+    k_ohm_cmil_per_ft: f64,
+    current: Current,
+    length: Length,
+    drop: Voltage,
+) -> f64 {
+    phases.lengths_of_lines() * k_ohm_cmil_per_ft * current.to_amperes() * length.to_feet()
+        / drop.to_volts()
+}
+
+/// Inductance of each phase of a reactor of a percentage.
+///
+/// L = z * U / (sqrt(3) * 2 * pi * f * I); z percentage as a ratio, U voltage between lines, f line frequency, I the
+/// current to which the percentage refers.
+pub fn reactor_inductance(
+    percent: Ratio,
+    voltage: Voltage,
+    frequency: Frequency,
+    reference: Current,
+) -> Inductance {
+    Inductance::henries(
+        percent.to_one() * voltage.to_volts()
+            / (SQRT_3 * 2.0 * PI * frequency.to_hertz() * reference.to_amperes()),
+    )
+}
+
+/// Source impedance on the base of a drive.
+///
+/// z = z_t * S_drive / S_t; z_t impedance of the transformer as a ratio, S rated powers of drive and transformer.
+pub fn impedance_on_base(impedance: Ratio, source: ApparentPower, base: ApparentPower) -> Ratio {
+    impedance * (base / source)
+}
+
+/// Fault current at the terminals of a transformer fed from an infinite bus.
+///
+/// I = I_fl / (z * t); I_fl full-load current, z impedance as a ratio, t share of it which is counted: 0.9 for the
+/// largest current with a nameplate impedance.
+/// Source: point-to-point method.
+pub fn transformer_fault_current(full_load: Current, impedance: Ratio, counted: Ratio) -> Current {
+    Current::amperes(full_load.to_amperes() / (impedance.to_one() * counted.to_one()))
+}
+
+/// A run as the point-to-point method sees it.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct FaultRun {
+    /// The constant C of one conductor.
+    pub constant: LengthPerImpedance,
+    /// Length one way.
+    pub length: Length,
+    /// Conductors in parallel.
+    pub sets: u32,
+}
+
+/// The factor f of a run: its impedance against that of everything before it.
+///
+/// f = sqrt(3) * L * I / (C * n * U) for three phases, 2 instead of sqrt(3) for one between lines; L length one way,
+/// I fault current at its start, C constant of the conductor, n conductors in parallel, U voltage between lines.
+/// Source: point-to-point method.
+pub fn run_factor(phases: Phases, at_start: Current, voltage: Voltage, run: FaultRun) -> Ratio {
+    Ratio::of_one(
+        phases.lengths_of_lines() * run.length.to_metres() * at_start.to_amperes()
+            / (run.constant.to_metres_per_ohm() * f64::from(run.sets) * voltage.to_volts()),
+    )
+}
+
+/// The multiplier M of a run: M = 1 / (1 + f). Source: point-to-point method.
+pub fn run_multiplier(factor: Ratio) -> Ratio {
+    Ratio::of_one(1.0 / (1.0 + factor.to_one()))
+}
+
+/// A product of a ratio and a quantity: the form of every `125 per cent of` rule.
+///
+/// y = k * x.
+pub fn share_of<Q: Quantity>(ratio: Ratio, quantity: Q) -> Q {
+    Q::from_si(ratio.to_one() * quantity.si())
+}
