@@ -1,6 +1,6 @@
 //! The person's document around the sheet: drafts which were refused, answers to margin notes, and edits.
 
-use super::{Entry, Home, Item, MOST_FEEDERS, MOST_SOURCES, Record, Sheet, home};
+use super::{Entry, Home, Item, LONGEST_DRAFT, MOST_FEEDERS, MOST_SOURCES, Record, Sheet, home};
 use crate::working::{Field, Grade, Holder, HolderId, MarginNote, NoteKind, Place};
 use std::collections::BTreeMap;
 use std::sync::Arc;
@@ -74,8 +74,8 @@ impl Document {
             Edit::Set(place, entry) => next.set(*place, entry),
             Edit::Clear(place) => next.clear(*place),
             Edit::Refuse(place, text) => {
-                if next.sheet.record(place.holder).is_some() {
-                    next.drafts.insert(*place, text.clone());
+                if next.sheet.has(*place) {
+                    next.drafts.insert(*place, cut(text));
                 }
             }
             Edit::AddFeeder { after } => next.add_feeder(*after, Record::default()),
@@ -101,8 +101,8 @@ impl Document {
             Edit::Answer(note, text) => {
                 if text.is_empty() {
                     next.answers.remove(note);
-                } else {
-                    next.answers.insert(note.clone(), text.clone());
+                } else if next.sheet.record(note.place.holder).is_some() {
+                    next.answers.insert(note.clone(), cut(text));
                 }
             }
             Edit::Replace(other) => next = (**other).clone(),
@@ -198,6 +198,11 @@ impl Document {
         self.drafts.retain(|place, _| place.holder != holder);
         self.answers.retain(|note, _| note.place.holder != holder);
     }
+}
+
+/// The text as far as it is kept, so that every document can be saved and opened again.
+fn cut(text: &str) -> String {
+    text.chars().take(LONGEST_DRAFT).collect()
 }
 
 fn find_mut(items: &mut [Arc<Item>], id: HolderId) -> Option<&mut Record> {

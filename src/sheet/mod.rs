@@ -16,7 +16,7 @@ pub use entries::{Entry, Impossible, Measured, Record};
 pub use history::{History, Step};
 pub use spec::{Home, MEASURES, Shape, Spec, UnitSystem, fields_of, home, spec};
 
-use crate::working::{Holder, HolderId};
+use crate::working::{Holder, HolderId, Place};
 use std::sync::Arc;
 
 /// Feeders a sheet may hold.
@@ -25,6 +25,9 @@ pub const MOST_FEEDERS: usize = 2_000;
 pub const MOST_SOURCES: usize = 200;
 /// Characters which a text may hold where its field sets no narrower limit.
 pub const LONGEST_TEXT: usize = 2_000;
+/// Characters of a refused text, and of an answer, which are kept. Far above what a field takes: reached only by
+/// pasting a whole page into a cell.
+pub const LONGEST_DRAFT: usize = 10_000;
 
 /// One feeder, or one other source of heat: an identity and what was entered for it.
 #[derive(Debug, Clone, PartialEq)]
@@ -58,6 +61,16 @@ impl Sheet {
             Holder::Feeder(id) => find(&self.feeders, id),
             Holder::Source(id) => find(&self.sources, id),
         }
+    }
+
+    /// Whether the place exists: its holder is there, and is of the kind which has the field.
+    pub fn has(&self, place: Place) -> bool {
+        let of_holder = match place.holder {
+            Holder::Sheet => Home::Sheet,
+            Holder::Feeder(_) => Home::Feeder,
+            Holder::Source(_) => Home::Source,
+        };
+        home(place.field) == of_holder && self.record(place.holder).is_some()
     }
 
     /// Whether nothing at all was entered.
