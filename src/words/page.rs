@@ -1,0 +1,401 @@
+//! Every other text of the page and of the printed summary: headings, buttons, help, status, files, keys.
+//!
+//! Here: fixed texts, one line each in [`texts!`], and the few which carry a value. Not here: names of fields and
+//! choices, findings, refusals. To add a text, add a line `name = "text";` to the group it belongs to.
+
+macro_rules! texts {
+    ($($name:ident = $text:expr;)+) => {
+        $(
+            #[doc = $text]
+            pub const fn $name() -> &'static str {
+                $text
+            }
+        )+
+        /// Every fixed text with its name, for the tests.
+        pub const ALL: &[(&str, &str)] = &[$((stringify!($name), $text)),+];
+    };
+}
+
+texts! {
+    // The program.
+    program = "Ventrail";
+    purpose = "A worksheet for planning control panels of variable frequency drives";
+    skip_to_sheet = "Skip to the sheet";
+
+    // The bar at the head of the window.
+    bar_label = "Sheet and files";
+    new_sheet = "New sheet";
+    open_file = "Open file";
+    save_file = "Save file";
+    print = "Print";
+    undo = "Undo";
+    redo = "Redo";
+    nothing_to_undo = "Nothing to undo";
+    nothing_to_redo = "Nothing to redo";
+    keys_button = "Keys";
+    close = "Close";
+    cancel = "Cancel";
+    go_on = "Go on";
+
+    // The sheet and its parts.
+    untitled = "Untitled sheet";
+    heading_title = "Title block";
+    heading_supply = "Supply";
+    heading_feeders = "Feeders";
+    heading_incoming = "Incoming circuit";
+    heading_enclosure = "Enclosure and air";
+    heading_ledger = "Heat ledger";
+    heading_sources = "Other sources of heat";
+    heading_margin = "Margin";
+    heading_totals = "Totals";
+    heading_notes = "Margin notes";
+    heading_working = "Working";
+    heading_summary = "Summary";
+    heading_assumptions = "Assumed until somebody types it";
+    heading_cautions = "Cautions";
+    heading_protection = "Protection and conductors";
+    heading_reactors = "Input reactors and heat";
+    heading_air = "Temperature and air";
+    sections_label = "Parts of the sheet";
+
+    // The empty sheet.
+    empty_sheet = "List the motors of one panel, each on its own drive, with its supply and its enclosure: Ventrail sizes conductors, devices and reactors, adds up the heat, and shows how each figure came about.";
+    empty_start = "Add the first feeder";
+    empty_demo = "Look at a demo sheet";
+    demo_brine_hall = "Demo: brine hall, 11 feeders, filter fans";
+    demo_outdoor = "Demo: sealed panel outdoors at 1,900 m";
+    demo_remark = "Demo with invented data";
+    no_feeders = "No feeders yet.";
+    no_sources = "No other sources of heat yet.";
+    no_notes = "Nothing to note.";
+    no_assumptions = "Nothing is assumed: every value was entered or worked out.";
+
+    // The three inks.
+    ink_key_entered = "entered by you";
+    ink_key_assumed = "assumed until you type it";
+    ink_key_worked = "worked out";
+    ink_key_label = "How values are marked";
+
+    // Sentences which open as lists.
+    sentence_open = "Fill in";
+    sentence_close = "Done";
+    sentence_help = "Press Enter or click a value to fill in this part as a list.";
+    assumed_hint = "assumed";
+    clear_entry = "Empty this field";
+    take_assumed = "Go back to the assumed value";
+    choose_none = "not entered";
+    unit_hint = "A unit may be typed after the number.";
+    refused_label = "Not taken";
+    working_open = "Show the working";
+
+    // Feeders.
+    add_feeder = "Add feeder";
+    duplicate_feeder = "Duplicate";
+    delete_feeder = "Delete";
+    move_up = "Move up";
+    move_down = "Move down";
+    feeder_form_open = "All fields of this feeder";
+    feeder_form_title = "Feeder in full";
+    group_driven = "What is driven";
+    group_ahead = "Ahead of the drive";
+    group_behind = "Behind the drive";
+    group_enclosure = "In the enclosure";
+    group_drive = "Drive, by its data sheet";
+    group_device = "Device and short circuit";
+    group_reactor = "Input reactor";
+    group_motor = "Motor and duty";
+    group_remarks = "Remarks";
+    head_drop = "Drop";
+    head_heat = "Heat";
+    head_device = "Device";
+    head_conductors = "Conductors";
+    head_reactor = "Reactor";
+    head_margin = "Margin";
+    head_motor_current = "Motor current";
+    head_disconnect = "Disconnect";
+    head_grounding = "Grounding conductor";
+    head_running = "running together";
+    head_connected = "connected";
+    head_total = "Total";
+    grid_label = "Feeders, one in each row";
+    grid_help = "Arrow keys move, typing replaces, Enter or F2 edits, Escape gives up the edit.";
+    standing_by_mark = "stands by";
+
+    // Other sources of heat.
+    add_source = "Add source";
+    delete_source = "Delete source";
+    source_unnamed = "Unnamed source";
+
+    // Worked values.
+    ledger_label = "Heat ledger, watts";
+    ledger_advised = "Advised reactors, not entered: beside the total";
+    conductors_ahead = "Conductors ahead of the drive";
+    conductors_behind = "Conductors behind the drive";
+    conductors_incoming = "Incoming conductors";
+    required_ampacity = "Ampacity required";
+    usable_ampacity = "Ampacity of the size";
+    smaller_size = "Next smaller size";
+    grounding_conductor = "Equipment grounding conductor";
+    branch_device = "Branch device";
+    main_device = "Main device";
+    disconnect = "Disconnect, at least";
+    voltage_drop = "Voltage drop";
+    reactor_entered = "Reactor entered";
+    reactor_advised = "Reactor advised";
+    reactor_not_needed = "none needed";
+    reactor_none = "none";
+    inductance = "Inductance of each phase";
+    reactor_rated_current = "Rated current, at least";
+    running_current = "Running current";
+    connected_current = "Connected current";
+    fault_at_source = "Fault current at the start of the incoming run";
+    fault_at_panel = "Fault current at the panel";
+    lowest_rating = "Lowest rating inside";
+    surface = "Effective surface";
+    conductance = "Heat through the walls";
+    sealed_inside = "Air inside when sealed";
+    air_density = "Density of the inlet air";
+    site_pressure = "Air pressure of the site";
+    airflow = "Airflow, no credit for the walls";
+    airflow_credited = "Airflow, with credit for the walls";
+    airflow_metric_rule = "Airflow by the metric trade rule";
+    airflow_us_rule = "Airflow by the US trade rule";
+    not_worked = "not worked";
+    cannot_be_worked = "Something is missing: see the margin notes.";
+
+    // The margin.
+    margin_label = "Totals and margin notes";
+    notes_label = "Margin notes, stops first";
+    go_to_subject = "Go to it";
+    go_to_note = "Go to the note";
+    answer = "Answer";
+    answer_placeholder = "Your answer, for the reviewer";
+    next_note = "Next note";
+    previous_note = "Previous note";
+
+    // The working strip.
+    strip_label = "Working of the figure under the cursor";
+    strip_empty = "Move to a worked figure to read its working here.";
+    strip_entered = "You entered this value.";
+    strip_follow = "Space shows the working";
+    strip_pin = "Pin this working";
+    strip_unpin = "Follow the cursor again";
+    strip_pinned = "pinned";
+    strip_whole = "Whole chain";
+    strip_short = "First step only";
+
+    // Cautions.
+    caution_label = "Caution";
+    caution_open = "Read all cautions";
+    caution_shrink = "Show one line only";
+
+    // Where the sheet is kept.
+    saved_here = "Saved in this browser";
+    saving = "Saving in this browser";
+    not_in_file = "Not yet in a file";
+    changed_since_file = "Changed since it was saved as a file";
+    same_as_file = "The file holds this state";
+    store_refused = "This browser did not keep the last change. Save the sheet as a file now, so that it is not lost.";
+    store_full = "This browser's store is full. The sheet is safe on this page; save it as a file now.";
+    store_missing = "This browser keeps nothing for this page, perhaps because it is a private window. Save the sheet as a file before you close it.";
+    store_unreadable = "What this browser kept of the last sheet could not be read. It is kept as it is; you can save it as a file and look at it.";
+    save_kept_text = "Save what was kept as a file";
+    other_tab = "This sheet was changed in another tab. Nothing is lost: choose which of the two to go on with.";
+    other_tab_take = "Take the other tab's sheet";
+    other_tab_keep = "Keep this one";
+    leave_unsaved = "The last change is not yet kept.";
+
+    // Files.
+    file_opened = "The file is open.";
+    file_saved = "Handed to the browser as a file.";
+    file_refused_title = "The file was not opened";
+    file_refused_kept = "The sheet you had open is unchanged.";
+    file_unreadable = "The browser could not read the file. It may have been moved, or be in use elsewhere.";
+    file_too_large = "The file is too large to be a sheet.";
+    open_replaces = "The open sheet is not in a file. Opening another one replaces it; undo brings it back until this tab is closed.";
+    new_replaces = "The open sheet is not in a file. A new sheet replaces it; undo brings it back until this tab is closed.";
+    default_file_name = "ventrail-sheet";
+
+    // The printed summary.
+    print_title = "Panel heat and protection summary";
+    print_sheet = "Sheet";
+    print_version = "Ventrail version";
+    print_planning = "Planning figures, not an approval";
+    print_review = "Review";
+    print_prepared_by = "Prepared by";
+    print_reviewed_by = "Reviewed by";
+    print_signature = "Signature";
+    print_license = "License number";
+    print_date = "Date";
+    print_remarks = "Reviewer's remarks";
+    print_inks = "Marks: e entered, a assumed, no mark worked out";
+    print_mark_entered = "e";
+    print_mark_assumed = "a";
+    print_continued = "continued";
+    print_answer = "Answer:";
+    print_no_answer = "No answer yet.";
+    print_workings = "Workings";
+    print_sources = "Sources";
+    print_page_numbers = "Some browsers number the pages only when headers and footers are switched on in the print window.";
+    print_end = "End of the summary";
+
+    // When the program stops.
+    stopped_title = "Ventrail has stopped";
+    stopped_text = "The program met a fault of its own. What you had entered was kept in this browser at each step: save that copy as a file, then load the page again.";
+    stopped_twice = "Ventrail stopped twice while opening the last sheet, so it has opened an empty one. The last sheet is kept: save it as a file.";
+
+    // The list of keys.
+    keys_title = "Keys";
+    keys_where_grid = "In the feeder list";
+    keys_where_page = "Everywhere";
+}
+
+/// What the keys do in the feeder list: keys, what they do.
+pub const fn grid_keys() -> &'static [(&'static str, &'static str)] {
+    &[
+        ("Arrow keys", "move to the next cell"),
+        (
+            "Tab, Shift+Tab",
+            "next cell, previous cell; out of the list at its ends",
+        ),
+        (
+            "Enter, F2",
+            "edit the cell; Enter again takes the value and moves down",
+        ),
+        ("Escape", "give up the edit, the old value stays"),
+        ("typing", "replace the value"),
+        ("Delete, Backspace", "empty the cell"),
+        ("Space", "show the working of the figure in the strip below"),
+        ("Home, End", "first cell, last cell of the row"),
+        ("Ctrl+Home, Ctrl+End", "first row, last row"),
+        ("Alt+Up, Alt+Down", "move the feeder up, down"),
+        ("Ctrl+D", "duplicate the feeder"),
+    ]
+}
+
+/// What the keys do everywhere on the page: keys, what they do.
+pub const fn page_keys() -> &'static [(&'static str, &'static str)] {
+    &[
+        ("Ctrl+Z", "undo"),
+        ("Ctrl+Y, Ctrl+Shift+Z", "redo"),
+        ("Ctrl+S", "save the sheet as a file"),
+        ("Ctrl+O", "open a file"),
+        ("Ctrl+P", "print the summary"),
+        ("F8, Shift+F8", "next margin note, previous margin note"),
+    ]
+}
+
+/// `singular` for one, `plural` for any other number, after the number itself.
+fn counted(count: usize, singular: &str, plural: &str) -> String {
+    if count == 1 {
+        format!("1 {singular}")
+    } else {
+        format!("{count} {plural}")
+    }
+}
+
+/// How many findings there are of each grade: `1 stop, 3 queries, 1 note`.
+pub fn grade_counts(stops: usize, queries: usize, notes: usize) -> String {
+    let parts: Vec<String> = [
+        (stops, "stop", "stops"),
+        (queries, "query", "queries"),
+        (notes, "note", "notes"),
+    ]
+    .into_iter()
+    .filter(|(count, _, _)| *count > 0)
+    .map(|(count, one, many)| counted(count, one, many))
+    .collect();
+    if parts.is_empty() {
+        no_notes().to_owned()
+    } else {
+        parts.join(", ")
+    }
+}
+
+/// How many feeders there are and which of them stand by: `11 feeders, 9 run together (P-403 and F-433 stand by)`.
+pub fn feeder_counts(feeders: usize, standing_by: &[String]) -> String {
+    let all = counted(feeders, "feeder", "feeders");
+    match standing_by {
+        [] => all,
+        [one] => format!(
+            "{all}, {} run together ({one} stands by)",
+            feeders.saturating_sub(1)
+        ),
+        many => format!(
+            "{all}, {} run together ({} stand by)",
+            feeders.saturating_sub(many.len()),
+            listed(many)
+        ),
+    }
+}
+
+/// Words in a row: `a`, `a and b`, `a, b and c`.
+pub fn listed(words: &[String]) -> String {
+    match words {
+        [] => String::new(),
+        [one] => one.clone(),
+        [rest @ .., last] => format!("{} and {last}", rest.join(", ")),
+    }
+}
+
+/// Kept in the browser's store at a time of day.
+pub fn saved_here_at(time: &str) -> String {
+    format!("Saved in this browser at {time}")
+}
+
+/// In a file of this name, unchanged since.
+pub fn in_file(name: &str) -> String {
+    format!("In the file {name}")
+}
+
+/// Changed since it was saved as a file of this name.
+pub fn changed_since(name: &str) -> String {
+    format!("Changed since it was saved as {name}")
+}
+
+/// Handed to the browser under a name.
+pub fn file_saved_as(name: &str) -> String {
+    format!("Handed to the browser as {name}")
+}
+
+/// A file of this name is open.
+pub fn file_opened_as(name: &str) -> String {
+    format!("{name} is open.")
+}
+
+/// The button which takes back an edit of this name.
+pub fn undo_named(edit: &str) -> String {
+    format!("Undo: {edit}")
+}
+
+/// The button which does an edit of this name again.
+pub fn redo_named(edit: &str) -> String {
+    format!("Redo: {edit}")
+}
+
+/// A feeder without a tag, by its row, counted from one.
+pub fn untagged_feeder(row: usize) -> String {
+    format!("feeder in row {row}")
+}
+
+/// The heading of the form of one feeder.
+pub fn feeder_form_of(tag: &str) -> String {
+    format!("Feeder {tag} in full")
+}
+
+/// The head of a printed page: sheet, issue, date.
+pub fn print_head(sheet: &str, issue: &str, date: &str) -> String {
+    let mut parts = vec![sheet.to_owned()];
+    if !issue.is_empty() {
+        parts.push(format!("issue {issue}"));
+    }
+    if !date.is_empty() {
+        parts.push(date.to_owned());
+    }
+    parts.join(", ")
+}
+
+/// What the page says aloud after an edit has changed the findings.
+pub fn announced(counts: &str) -> String {
+    format!("Worked out: {counts}")
+}
