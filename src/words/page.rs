@@ -3,6 +3,10 @@
 //! Here: fixed texts, one line each in [`texts!`], and the few which carry a value. Not here: names of fields and
 //! choices, findings, refusals. To add a text, add a line `name = "text";` to the group it belongs to.
 
+use super::labels::label;
+use crate::sheet::Edit;
+use crate::working::{Holder, HolderId, Place};
+
 macro_rules! texts {
     ($($name:ident = $text:expr;)+) => {
         $(
@@ -225,7 +229,7 @@ texts! {
     print_prepared_by = "Prepared by";
     print_reviewed_by = "Reviewed by";
     print_signature = "Signature";
-    print_license = "License number";
+    print_licence = "Licence number";
     print_date = "Date";
     print_remarks = "Reviewer's remarks";
     print_inks = "Marks: e entered, a assumed, no mark worked out";
@@ -393,6 +397,31 @@ pub fn print_head(sheet: &str, issue: &str, date: &str) -> String {
         parts.push(date.to_owned());
     }
     parts.join(", ")
+}
+
+/// What an edit does, to name its undo: `drive input of P-402`. `tag` gives the name of a feeder or of a source of heat.
+pub fn edit_name(edit: &Edit, tag: impl Fn(HolderId) -> String) -> String {
+    let at = |place: &Place| {
+        let field = label(place.field);
+        match place.holder {
+            Holder::Sheet => field.to_owned(),
+            Holder::Feeder(id) | Holder::Source(id) => format!("{field} of {}", tag(id)),
+        }
+    };
+    match edit {
+        Edit::Set(place, _) => at(place),
+        Edit::Clear(place) => format!("empty {}", at(place)),
+        Edit::Refuse(place, _) => format!("refused text in {}", at(place)),
+        Edit::AddFeeder { .. } => "add a feeder".to_owned(),
+        Edit::DuplicateFeeder(id) => format!("duplicate {}", tag(*id)),
+        Edit::DeleteFeeder(id) => format!("delete {}", tag(*id)),
+        Edit::MoveFeeder { id, up: true } => format!("move {} up", tag(*id)),
+        Edit::MoveFeeder { id, up: false } => format!("move {} down", tag(*id)),
+        Edit::AddSource => "add a source of heat".to_owned(),
+        Edit::DeleteSource(id) => format!("delete {}", tag(*id)),
+        Edit::Answer(note, _) => format!("answer about {}", at(&note.place)),
+        Edit::Replace(_) => "open another sheet".to_owned(),
+    }
 }
 
 /// What the page says aloud after an edit has changed the findings.
