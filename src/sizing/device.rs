@@ -1,8 +1,13 @@
 //! The branch protective device ahead of a drive.
 
-use crate::quantity::Current;
-use crate::tables::DeviceType;
-use crate::working::{Figure, Given};
+use crate::math::{agree, reaches};
+use crate::physics::circuit::share_of;
+use crate::quantity::{Current, Ratio};
+use crate::sizing::rules;
+use crate::tables::nec_motors::largest_ratio;
+use crate::tables::nec_ratings::{LARGEST_CLASS_CC, at_or_above, at_or_below};
+use crate::tables::{DeviceType, Edition};
+use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, Term};
 use std::collections::BTreeSet;
 use std::sync::Arc;
 
@@ -34,4 +39,255 @@ pub struct Device {
     pub largest: Option<Arc<Figure>>,
     /// The installed rating: as entered, or the largest permitted.
     pub rating: Option<Given<Current>>,
+}
+
+/// Sizes the branch device of a drive.
+///
+/// Percentage of the table times motor current, next standard rating up, never above what the drive's instructions
+/// permit and only of a type which they list. Source: NEC 2023, 430.52(C)(1), 430.52(C)(2), 430.130(A), 240.6(A).
+pub fn size_branch_device(
+    input: &DeviceInput,
+    edition: Edition,
+    notes: &mut Vec<MarginNote>,
+) -> Device {
+    let product = product(input.device.value, &input.motor_current);
+    let largest = largest_permitted(input, &product, edition, notes);
+    let rating = installed(input, largest.as_ref(), edition, notes);
+    if let (Some(rating), Some(drive_input)) = (&rating, &input.drive_input)
+        && !reaches(rating.value.to_amperes(), drive_input.value.to_amperes())
+    {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            Field::DeviceRating,
+            NoteKind::DeviceBelowInput {
+                rating: rating.value,
+                input: drive_input.value,
+            },
+        ));
+    }
+    Device {
+        device: input.device.clone(),
+        product,
+        largest,
+        rating,
+    }
+}
+
+/// The percentage of Table 430.52(C)(1) times motor full-load current.
+fn product(device: DeviceType, motor_current: &Given<Current>) -> Arc<Figure> {
+    let percentage = largest_ratio(device);
+    let percentage_figure = Arc::new(rules::DEVICE_PERCENTAGE.figure(percentage, Vec::new()));
+    Arc::new(rules::DEVICE_PRODUCT.figure(
+        share_of(percentage, motor_current.value),
+        [Term::of("p", &percentage_figure), motor_current.term("I_m")],
+    ))
+}
+
+fn largest_permitted(
+    input: &DeviceInput,
+    product: &Arc<Figure>,
+    edition: Edition,
+    notes: &mut Vec<MarginNote>,
+) -> Option<Arc<Figure>> {
+    let (by_rule, by_rule_figure) = standard_rating(input.device.value, product, edition, notes)?;
+    if input
+        .permitted
+        .as_ref()
+        .is_some_and(|permitted| !permitted.contains(&input.device.value))
+    {
+        notes.push(
+            MarginNote::new(
+                Grade::Stop,
+                Field::DeviceType,
+                NoteKind::DeviceTypeNotPermitted { by_rule },
+            )
+            .about(&by_rule_figure),
+        );
+        return None;
+    }
+    let (rating, figure) = held_by_drive(input, by_rule, by_rule_figure, edition, notes)?;
+    if input.device.value == DeviceType::ClassCcFuse {
+        return held_by_class_cc(input, product, (rating, figure), notes);
+    }
+    Some(figure)
+}
+
+/// The product where it is a standard rating, else the next one up.
+///
+/// Class CC fuses go by the ratings of nontime-delay fuses here; where the class ends is worked afterwards.
+fn standard_rating(
+    device: DeviceType,
+    product: &Arc<Figure>,
+    edition: Edition,
+    notes: &mut Vec<MarginNote>,
+) -> Option<(Current, Arc<Figure>)> {
+    let amperes: Current = product.quantity()?;
+    let list = match device {
+        DeviceType::ClassCcFuse => DeviceType::NontimeDelayFuse,
+        other => other,
+    };
+    let Some(rating) = at_or_above(amperes, list, edition) else {
+        notes.push(
+            MarginNote::new(
+                Grade::Stop,
+                Field::DeviceType,
+                NoteKind::DeviceBeyondTable { product: amperes },
+            )
+            .about(product),
+        );
+        return None;
+    };
+    let figure = rules::DEVICE_STANDARD.figure(rating, [Term::of("I_d", product)]);
+    Some((rating, Arc::new(figure)))
+}
+
+fn held_by_drive(
+    input: &DeviceInput,
+    by_rule: Current,
+    by_rule_figure: Arc<Figure>,
+    edition: Edition,
+    notes: &mut Vec<MarginNote>,
+) -> Option<(Current, Arc<Figure>)> {
+    let Some(limit) = &input.largest else {
+        return Some((by_rule, by_rule_figure));
+    };
+    if reaches(limit.value.to_amperes(), by_rule.to_amperes()) {
+        return Some((by_rule, by_rule_figure));
+    }
+    let Some(taken) = at_or_below(limit.value, input.device.value, edition) else {
+        notes.push(MarginNote::new(
+            Grade::Stop,
+            Field::LargestPermitted,
+            NoteKind::LimitBelowStandard { limit: limit.value },
+        ));
+        return None;
+    };
+    let kind = if agree(taken.to_amperes(), limit.value.to_amperes()) {
+        NoteKind::DeviceHeldByDrive { by_rule, taken }
+    } else {
+        NoteKind::LimitNotStandard {
+            limit: limit.value,
+            taken,
+        }
+    };
+    notes.push(MarginNote::new(Grade::Note, Field::LargestPermitted, kind));
+    let figure = rules::DEVICE_DRIVE_LIMIT.figure(
+        taken,
+        [
+            Term::of("by rule", &by_rule_figure),
+            limit.term("drive's largest"),
+        ],
+    );
+    Some((taken, Arc::new(figure)))
+}
+
+/// Class CC ends at 30 A: enough only where that is not below 125 per cent of the larger of motor and drive current.
+fn held_by_class_cc(
+    input: &DeviceInput,
+    product: &Arc<Figure>,
+    (rating, figure): (Current, Arc<Figure>),
+    notes: &mut Vec<MarginNote>,
+) -> Option<Arc<Figure>> {
+    if reaches(LARGEST_CLASS_CC.to_amperes(), rating.to_amperes()) {
+        return Some(figure);
+    }
+    let motor = input.motor_current.value;
+    let larger = match &input.drive_input {
+        Some(drive) if drive.value > motor => drive.value,
+        _ => motor,
+    };
+    let needed = 1.25 * larger;
+    let field = Field::DeviceType;
+    if !reaches(LARGEST_CLASS_CC.to_amperes(), needed.to_amperes()) {
+        notes.push(
+            MarginNote::new(Grade::Stop, field, NoteKind::ClassCcTooSmall { needed })
+                .about(product),
+        );
+        return None;
+    }
+    notes.push(MarginNote::new(
+        Grade::Note,
+        field,
+        NoteKind::ClassCcEnds {
+            by_rule: rating,
+            taken: LARGEST_CLASS_CC,
+        },
+    ));
+    Some(Arc::new(rules::DEVICE_CLASS_CC.figure(
+        LARGEST_CLASS_CC,
+        [
+            Term::of("I_n", &figure),
+            Term::constant("class ends at", LARGEST_CLASS_CC),
+            Term::constant("at least", needed),
+        ],
+    )))
+}
+
+fn installed(
+    input: &DeviceInput,
+    largest: Option<&Arc<Figure>>,
+    edition: Edition,
+    notes: &mut Vec<MarginNote>,
+) -> Option<Given<Current>> {
+    let Some(entered) = &input.rating else {
+        return largest.and_then(Given::from_figure);
+    };
+    let field = Field::DeviceRating;
+    let is_standard = at_or_above(entered.value, input.device.value, edition)
+        .is_some_and(|rating| agree(rating.to_amperes(), entered.value.to_amperes()));
+    if !is_standard {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            field,
+            NoteKind::DeviceNotStandard {
+                entered: entered.value,
+            },
+        ));
+    }
+    if let Some(figure) = largest
+        && let Some(most) = figure.quantity::<Current>()
+        && !reaches(most.to_amperes(), entered.value.to_amperes())
+    {
+        notes.push(
+            MarginNote::new(
+                Grade::Stop,
+                field,
+                NoteKind::DeviceAboveMaximum {
+                    entered: entered.value,
+                    largest: most,
+                },
+            )
+            .about(figure),
+        );
+    }
+    Some(entered.clone())
+}
+
+/// The branch device worked again for the type of the main device, under the drive's own limit: what a main device of
+/// that type may count. Source: NEC 2023, 430.62(A), 409.21(C).
+pub fn branch_for_main(
+    main: DeviceType,
+    branch: &DeviceInput,
+    edition: Edition,
+) -> Option<(Current, Arc<Figure>)> {
+    // Its findings belong to the branch, where they are made already.
+    let mut unheard = Vec::new();
+    let product = product(main, &branch.motor_current);
+    let (by_rule, figure) = standard_rating(main, &product, edition, &mut unheard)?;
+    let as_main = DeviceInput {
+        device: Given {
+            value: main,
+            ..branch.device.clone()
+        },
+        ..branch.clone()
+    };
+    held_by_drive(&as_main, by_rule, figure, edition, &mut unheard)
+}
+
+/// Smallest rating of the disconnect of a drive: 115 per cent of its rated input current.
+///
+/// Source: NEC 2023, 430.128 (from memory).
+pub fn disconnect(drive_input: &Given<Current>) -> Arc<Figure> {
+    let rating = share_of(Ratio::of_one(1.15), drive_input.value);
+    Arc::new(rules::DISCONNECT.figure(rating, [drive_input.term("I_in")]))
 }

@@ -1,7 +1,10 @@
 //! The input reactor: whether practice asks for one, and what an entered one is.
 
-use crate::quantity::{Current, Ratio};
-use crate::working::{Figure, Given, ReactorReason};
+use crate::physics::circuit::{Phases, apparent_power, impedance_on_base, reactor_inductance};
+use crate::physics::heat::reactor_loss_by_motor;
+use crate::quantity::{ApparentPower, Current, Frequency, Power, Ratio, ShaftPower, Voltage};
+use crate::sizing::rules;
+use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, ReactorReason, Term};
 use std::sync::Arc;
 
 /// A reactor of a percentage, entered or advised.
@@ -15,8 +18,8 @@ pub struct ReactorSize {
     pub inductance: Arc<Figure>,
     /// Smallest rated current, RMS.
     pub rated_current: Arc<Figure>,
-    /// Its heat.
-    pub heat: Arc<Figure>,
+    /// Its heat: as entered, else assumed from motor power; `None` where neither is known.
+    pub heat: Option<Given<Power>>,
 }
 
 /// The reactor of a feeder.
@@ -32,4 +35,285 @@ pub struct Reactor {
     pub entered: Option<ReactorSize>,
     /// The reactor which practice advises: it counts nowhere until it is entered.
     pub advised: Option<ReactorSize>,
+}
+
+/// The current to which a percentage refers.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
+pub enum Reference {
+    /// The drive's rated input current.
+    DriveInput,
+    /// The motor's full-load current.
+    MotorCurrent,
+    /// A current which is entered.
+    Own,
+}
+
+/// What the supply brings to the question of a reactor.
+#[derive(Debug, Clone, PartialEq)]
+pub struct ReactorSupply {
+    /// Voltage between lines.
+    pub voltage: Given<Voltage>,
+    /// Frequency.
+    pub frequency: Given<Frequency>,
+    /// Power of the source, where known.
+    pub power: Option<Given<ApparentPower>>,
+    /// Impedance of the source on its own base.
+    pub impedance: Given<Ratio>,
+    /// Voltage unbalance at the panel.
+    pub unbalance: Given<Ratio>,
+    /// Switched capacitors on the bus.
+    pub has_capacitors: bool,
+    /// Surges expected.
+    pub has_surges: bool,
+}
+
+/// What the drive brings to it.
+#[derive(Debug, Clone, PartialEq)]
+pub struct ReactorInput {
+    /// The drive's rated input current.
+    pub drive_input: Given<Current>,
+    /// Motor full-load current.
+    pub motor_current: Option<Given<Current>>,
+    /// Motor power.
+    pub motor_power: Option<Given<ShaftPower>>,
+    /// Choke in the drive.
+    pub choke: Given<Ratio>,
+    /// Reactor, where entered; zero says that there is none.
+    pub percent: Option<Given<Ratio>>,
+    /// The current to which the percentage refers.
+    pub reference: Reference,
+    /// That current, where it is one of its own.
+    pub own_reference: Option<Given<Current>>,
+    /// Its loss, where entered.
+    pub loss: Option<Given<Power>>,
+}
+
+/// A source at least this many times the drive asks for a reactor ...
+const SOURCE_RATIO_LIMIT: f64 = 10.0;
+/// ... where it has at least this power. Two drive manuals agree; see `rectifier/` practice.
+const SOURCE_POWER_LIMIT: ApparentPower = ApparentPower::kilovolt_amperes(500.0);
+/// Source impedance on the drive's base under which reactance is to be added.
+const SOURCE_IMPEDANCE_LIMIT: Ratio = Ratio::per_cent(1.0);
+/// Voltage unbalance from which practice asks for a reactor: published limits are 2 and 3 per cent, the lower is taken.
+const UNBALANCE_LIMIT: Ratio = Ratio::per_cent(2.0);
+/// A choke of this size in the drive answers source impedance and source power, never surges or capacitors.
+const ANSWERING_CHOKE: Ratio = Ratio::per_cent(4.0);
+
+/// Works whether practice asks for a reactor, and what the entered and the advised ones are.
+pub fn reactor_of(
+    input: &ReactorInput,
+    supply: &ReactorSupply,
+    notes: &mut Vec<MarginNote>,
+) -> Reactor {
+    let drive_power = Arc::new(rules::DRIVE_APPARENT_POWER.figure(
+        apparent_power(Phases::Three, supply.voltage.value, input.drive_input.value),
+        [supply.voltage.term("U"), input.drive_input.term("I_in")],
+    ));
+    let (source_ratio, source_impedance) = source_figures(&drive_power, supply);
+    let reasons = reasons(
+        input,
+        supply,
+        source_ratio.as_ref(),
+        source_impedance.as_ref(),
+    );
+    let advised_percent = advised_step(&reasons);
+    let entered = input
+        .percent
+        .as_ref()
+        .filter(|percent| percent.value > Ratio::of_one(0.0))
+        .and_then(|percent| entered_size(percent, input, supply, notes));
+    note_advice(input, advised_percent, &reasons, notes);
+    let is_answered = input
+        .percent
+        .as_ref()
+        .zip(advised_percent)
+        .is_some_and(|(entered, advised)| entered.value >= advised);
+    let advised = advised_percent
+        .filter(|_| !is_answered)
+        .map(|percent| advised_size(percent, input, supply));
+    Reactor {
+        reasons,
+        source_ratio,
+        source_impedance,
+        entered,
+        advised,
+    }
+}
+
+fn source_figures(
+    drive_power: &Arc<Figure>,
+    supply: &ReactorSupply,
+) -> (Option<Arc<Figure>>, Option<Arc<Figure>>) {
+    let (Some(source), Some(drive)) = (&supply.power, drive_power.quantity::<ApparentPower>())
+    else {
+        return (None, None);
+    };
+    let ratio = rules::SOURCE_RATIO.figure(
+        source.value / drive,
+        [source.term("S_t"), Term::of("S_d", drive_power)],
+    );
+    let impedance = rules::SOURCE_IMPEDANCE.figure(
+        impedance_on_base(supply.impedance.value, source.value, drive),
+        [
+            supply.impedance.term("z_t"),
+            Term::of("S_d", drive_power),
+            source.term("S_t"),
+        ],
+    );
+    (Some(Arc::new(ratio)), Some(Arc::new(impedance)))
+}
+
+fn reasons(
+    input: &ReactorInput,
+    supply: &ReactorSupply,
+    source_ratio: Option<&Arc<Figure>>,
+    source_impedance: Option<&Arc<Figure>>,
+) -> Vec<ReactorReason> {
+    let has_answering_choke = input.choke.value >= ANSWERING_CHOKE;
+    let is_large_source = source_ratio
+        .and_then(|figure| figure.quantity::<Ratio>())
+        .is_some_and(|ratio| ratio.to_one() >= SOURCE_RATIO_LIMIT)
+        && supply
+            .power
+            .as_ref()
+            .is_some_and(|power| power.value >= SOURCE_POWER_LIMIT);
+    let is_stiff_source = source_impedance
+        .and_then(|figure| figure.quantity::<Ratio>())
+        .is_some_and(|impedance| impedance < SOURCE_IMPEDANCE_LIMIT);
+    [
+        (
+            is_large_source && !has_answering_choke,
+            ReactorReason::SourcePower,
+        ),
+        (
+            is_stiff_source && !has_answering_choke,
+            ReactorReason::SourceImpedance,
+        ),
+        (
+            supply.unbalance.value >= UNBALANCE_LIMIT,
+            ReactorReason::Unbalance,
+        ),
+        (supply.has_capacitors, ReactorReason::Capacitors),
+        (supply.has_surges, ReactorReason::Surges),
+    ]
+    .into_iter()
+    .filter_map(|(holds, reason)| holds.then_some(reason))
+    .collect()
+}
+
+/// 3 per cent; 1.5 where only the source impedance asks for it.
+fn advised_step(reasons: &[ReactorReason]) -> Option<Ratio> {
+    match reasons {
+        [] => None,
+        [ReactorReason::SourceImpedance] => Some(Ratio::per_cent(1.5)),
+        _ => Some(Ratio::per_cent(3.0)),
+    }
+}
+
+fn note_advice(
+    input: &ReactorInput,
+    advised: Option<Ratio>,
+    reasons: &[ReactorReason],
+    notes: &mut Vec<MarginNote>,
+) {
+    let Some(advised) = advised else {
+        return;
+    };
+    let reasons = reasons.to_vec();
+    let kind = match &input.percent {
+        None => NoteKind::ReactorAdvised {
+            percent: advised,
+            reasons,
+        },
+        Some(entered) if entered.value < advised => NoteKind::ReactorBelowAdvice {
+            entered: entered.value,
+            advised,
+            reasons,
+        },
+        Some(_) => return,
+    };
+    notes.push(MarginNote::new(Grade::Query, Field::ReactorPercent, kind));
+}
+
+fn entered_size(
+    percent: &Given<Ratio>,
+    input: &ReactorInput,
+    supply: &ReactorSupply,
+    notes: &mut Vec<MarginNote>,
+) -> Option<ReactorSize> {
+    let reference = match input.reference {
+        Reference::DriveInput => Some(input.drive_input.clone()),
+        Reference::MotorCurrent => input.motor_current.clone(),
+        Reference::Own => input.own_reference.clone(),
+    };
+    let Some(reference) = reference else {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            Field::ReactorReferenceCurrent,
+            NoteKind::ReactorReferenceMissing,
+        ));
+        return None;
+    };
+    let heat = input.loss.clone().or_else(|| assumed_heat(input));
+    Some(size_of(percent, reference, heat, input, supply))
+}
+
+/// The advised reactor refers to the drive's rated input current, and its heat is the assumed one.
+fn advised_size(percent: Ratio, input: &ReactorInput, supply: &ReactorSupply) -> ReactorSize {
+    let percent = Given {
+        value: percent,
+        origin: crate::working::Origin::Constant,
+    };
+    size_of(
+        &percent,
+        input.drive_input.clone(),
+        assumed_heat(input),
+        input,
+        supply,
+    )
+}
+
+fn size_of(
+    percent: &Given<Ratio>,
+    reference: Given<Current>,
+    heat: Option<Given<Power>>,
+    input: &ReactorInput,
+    supply: &ReactorSupply,
+) -> ReactorSize {
+    let inductance = reactor_inductance(
+        percent.value,
+        supply.voltage.value,
+        supply.frequency.value,
+        reference.value,
+    );
+    let inductance = rules::REACTOR_INDUCTANCE.figure(
+        inductance,
+        [
+            percent.term("z"),
+            supply.voltage.term("U"),
+            supply.frequency.term("f"),
+            reference.term("I_r"),
+        ],
+    );
+    let rated_current =
+        rules::REACTOR_CURRENT.figure(input.drive_input.value, [input.drive_input.term("I_in")]);
+    ReactorSize {
+        percent: percent.value,
+        reference,
+        inductance: Arc::new(inductance),
+        rated_current: Arc::new(rated_current),
+        heat,
+    }
+}
+
+/// Half a per cent of motor power.
+const ASSUMED_LOSS: Ratio = Ratio::per_cent(0.5);
+
+fn assumed_heat(input: &ReactorInput) -> Option<Given<Power>> {
+    let motor = input.motor_power.as_ref()?;
+    let figure = rules::REACTOR_HEAT_ASSUMED.assumed_figure(
+        reactor_loss_by_motor(ASSUMED_LOSS, motor.value),
+        [Term::constant("p", ASSUMED_LOSS), motor.term("P_m")],
+    );
+    Given::from_figure(&Arc::new(figure))
 }

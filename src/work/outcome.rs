@@ -1,7 +1,7 @@
 //! The worked sheet: plain data, for the page, the printed summary and the exported files.
 
 use crate::assume::Assumption;
-use crate::quantity::{Current, Temperature};
+use crate::quantity::{Current, Power, Temperature};
 use crate::sizing::air::Air;
 use crate::sizing::conductor::Conductors;
 use crate::sizing::device::Device;
@@ -59,7 +59,7 @@ pub struct WorkedSource {
     /// Whether it runs together with the feeders.
     pub is_running: bool,
     /// Its heat.
-    pub heat: Option<Arc<Figure>>,
+    pub heat: Option<Given<Power>>,
     /// Current it takes from the supply.
     pub current: Option<Given<Current>>,
 }
