@@ -1,10 +1,10 @@
 //! Entered and assumed values as text, in the units of the sheet, and why a value is assumed.
 
 use super::labels::choice;
-use super::numbers::{Rounding, number};
+use super::numbers::{Rounding, counted, number, number_not_above, number_not_below};
 use super::units::{bare, bare_in, field_unit, size, whole, with_unit};
 use crate::assume::AssumedValue;
-use crate::sheet::{Entry, Measured, UnitSystem};
+use crate::sheet::{Choice, Entry, Measured, Shape, UnitSystem, spec};
 use crate::working::{Amount, Field, RunField};
 
 /// What the filled cell of `field` shows, without the unit. A number typed in the unit shown stays as it was typed; any other
@@ -90,6 +90,35 @@ fn is_plain_number(text: &str) -> bool {
     [whole, decimals]
         .iter()
         .all(|part| !part.is_empty() && part.bytes().all(|digit| digit.is_ascii_digit()))
+}
+
+/// What `field` takes, in the units of the sheet: `100 V to 1,000 V`.
+pub fn accepted(field: Field, system: UnitSystem) -> String {
+    match spec(field).shape {
+        Shape::Text { longest } => format!("a text of up to {} characters", counted(longest)),
+        Shape::Measured { least, most, .. } => {
+            let unit = spec(field).unit(system);
+            format!(
+                "{} to {}",
+                with_unit(&number_not_below(unit.from_si(least), unit), unit),
+                with_unit(&number_not_above(unit.from_si(most), unit), unit)
+            )
+        }
+        Shape::Count { least, most } => {
+            format!("a whole number, {} to {}", whole(least), whole(most))
+        }
+        Shape::Choice(offered) => format!("one of: {}", answers(offered)),
+        Shape::Choices(offered) => format!("any of: {}", answers(offered)),
+        Shape::Size => "a conductor size such as 4 AWG, 3/0 or 250 kcmil".to_owned(),
+    }
+}
+
+fn answers(offered: &[Choice]) -> String {
+    offered
+        .iter()
+        .map(|answer| choice(*answer))
+        .collect::<Vec<_>>()
+        .join(", ")
 }
 
 /// Why the value of `field` is assumed as it is: a clause to stand behind it.

@@ -347,3 +347,22 @@ pub const fn known(known: Known) -> &'static str {
         Known::FromMemory => "from memory: confirm",
     }
 }
+
+/// `text` with a small first letter, unless its first word is an abbreviation.
+pub fn lower_first(text: &str) -> String {
+    let mut letters = text.chars();
+    match (letters.next(), letters.clone().next()) {
+        (Some(first), Some(second)) if !second.is_uppercase() => {
+            first.to_lowercase().chain(letters).collect()
+        }
+        _ => text.to_owned(),
+    }
+}
+
+/// `text` with a capital first letter.
+pub fn upper_first(text: &str) -> String {
+    let mut letters = text.chars();
+    letters.next().map_or_else(String::new, |first| {
+        first.to_uppercase().chain(letters).collect()
+    })
+}

@@ -5,19 +5,28 @@
 //! sentence does not compile; a second language would be a second arm beside each. Start with [`label`], [`amount`] and
 //! [`page`].
 
+mod cautions;
 mod entries;
 mod labels;
+mod notes;
 pub mod numbers;
 pub mod page;
+mod sentences;
 mod units;
 
+pub use cautions::{CautionWords, caution, caution_line};
 pub use entries::{
-    amount_of_field, amount_of_field_with_unit, assumed, assumed_with_unit, assumption_reason,
-    entry, entry_with_unit,
+    accepted, amount_of_field, amount_of_field_with_unit, assumed, assumed_with_unit,
+    assumption_reason, entry, entry_with_unit,
 };
 pub use labels::{
     choice, grade, grade_meaning, head, ink, known, label, ledger_group, limit, run, run_field,
     total, verdict,
+};
+pub use notes::{NoteWords, memory_table, note, place, reactor_reason};
+pub use sentences::{
+    Piece, assumed_in_sentence, enclosure_sentence, entry_in_sentence, fields, gap, in_sentence,
+    incoming_sentence, main_sentence, supply_sentence, title_block,
 };
 pub use units::{
     amount, amount_in, apart, bare, bare_in, device, device_type, field_symbol, field_unit,

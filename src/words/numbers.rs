@@ -91,6 +91,42 @@ fn punctuate(is_negative: bool, plain: &str) -> String {
     text
 }
 
+/// A number of things, grouped in thousands.
+pub fn counted(count: usize) -> String {
+    punctuate(false, &count.to_string())
+}
+
+/// `value` rounded as its unit asks, but never to less than it is: the lower end of a range.
+pub fn number_not_below(value: f64, unit: Unit) -> String {
+    towards(value, unit, f64::ceil)
+}
+
+/// `value` rounded as its unit asks, but never to more than it is: the upper end of a range.
+pub fn number_not_above(value: f64, unit: Unit) -> String {
+    towards(value, unit, f64::floor)
+}
+
+fn towards(value: f64, unit: Unit, whole: fn(f64) -> f64) -> String {
+    let decimals = match rounding(unit, value) {
+        Rounding::Exact => return number(value, Rounding::Exact),
+        Rounding::Decimals(decimals) => decimals,
+        Rounding::Significant {
+            digits,
+            most_decimals,
+        } => decimals_for(value.abs(), digits).min(most_decimals),
+    };
+    let scale = (0..decimals).fold(1.0, |scale, _| scale * 10.0);
+    let scaled = value * scale;
+    // A limit which is a round number but for its last bit stays that number.
+    let near = scaled.round();
+    let kept = if (scaled - near).abs() <= near.abs().max(1.0) * TIE {
+        near
+    } else {
+        whole(scaled)
+    };
+    number(kept / scale, Rounding::Decimals(decimals))
+}
+
 /// How a value of `number` in `unit` is rounded for show.
 pub fn rounding(unit: Unit, number: f64) -> Rounding {
     let digits = |digits, most_decimals| Rounding::Significant {

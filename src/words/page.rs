@@ -3,7 +3,7 @@
 //! Here: fixed texts, one line each in [`texts!`], and the few which carry a value. Not here: names of fields and
 //! choices, findings, refusals. To add a text, add a line `name = "text";` to the group it belongs to.
 
-use super::labels::label;
+use super::labels::{label, lower_first};
 use crate::sheet::Edit;
 use crate::working::{Holder, HolderId, Place};
 
@@ -402,9 +402,9 @@ pub fn print_head(sheet: &str, issue: &str, date: &str) -> String {
 /// What an edit does, to name its undo: `drive input of P-402`. `tag` gives the name of a feeder or of a source of heat.
 pub fn edit_name(edit: &Edit, tag: impl Fn(HolderId) -> String) -> String {
     let at = |place: &Place| {
-        let field = label(place.field);
+        let field = lower_first(label(place.field));
         match place.holder {
-            Holder::Sheet => field.to_owned(),
+            Holder::Sheet => field,
             Holder::Feeder(id) | Holder::Source(id) => format!("{field} of {}", tag(id)),
         }
     };
