@@ -7,12 +7,15 @@
 
 mod cautions;
 mod entries;
+mod formulas;
 mod labels;
 mod notes;
 pub mod numbers;
 pub mod page;
+mod rules;
 mod sentences;
 mod units;
+mod working;
 
 pub use cautions::{CautionWords, caution, caution_line};
 pub use entries::{
@@ -24,6 +27,7 @@ pub use labels::{
     total, verdict,
 };
 pub use notes::{NoteWords, memory_table, note, place, reactor_reason};
+pub use rules::{rule_title, symbol_for};
 pub use sentences::{
     Piece, assumed_in_sentence, enclosure_sentence, entry_in_sentence, fields, gap, in_sentence,
     incoming_sentence, main_sentence, supply_sentence, title_block,
@@ -31,4 +35,8 @@ pub use sentences::{
 pub use units::{
     amount, amount_in, apart, bare, bare_in, device, device_type, field_symbol, field_unit,
     quantities_apart, quantity, sets, size, unit_for_value, unit_of, unit_symbol, whole, with_unit,
+};
+pub use working::{
+    TermLine, WorkingLine, figure, source_in_full, source_line, source_name, working, working_flat,
+    working_line,
 };

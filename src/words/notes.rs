@@ -465,6 +465,19 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
             "Current and heat are counted in the connected totals only.",
             "Nothing needs to be done; change the duty where it runs together with the others.",
         ),
+        NoteKind::ImpedanceAssumed { assumed } => said(
+            format!(
+                "The transformer's impedance is assumed at {}.",
+                quantity(*assumed, system)
+            ),
+            "Real impedances of small transformers run down to 2 per cent, and a lower one lets more fault current through.",
+            "Enter the impedance from the transformer's nameplate.",
+        ),
+        NoteKind::SupplyVoltageMissing => said(
+            "The supply voltage is missing.",
+            "Currents, conductors and devices all follow from it; until it is entered nothing is sized.",
+            "Enter the voltage between lines of the supply.",
+        ),
         NoteKind::FaultCurrentUnknown => said(
             "The fault current at the panel is not known.",
             "The supply voltage, or the transformer's power, is missing, and no fault current is entered.",
