@@ -1,4 +1,17 @@
 //! Fills what is missing. Every filled value is marked as assumed; entered values pass as they are.
+//!
+//! Here: entries of a record become typed values with their origin. Not here: choices between rules, and the drive's
+//! rated input current and the losses, which are assumed by rules with a working of their own (`sizing`).
+//! Start with [`site`] and [`feeder`].
+
+mod feeder;
+mod reader;
+mod site;
+mod source;
+
+pub use feeder::{FeederInputs, feeder};
+pub use site::{EnclosureInputs, SheetInputs, Site, site};
+pub use source::{SourceInputs, source};
 
 use crate::quantity::WireSize;
 use crate::sheet::Choice;

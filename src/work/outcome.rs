@@ -192,4 +192,6 @@ pub struct Worked {
     pub assumptions: Vec<Assumption>,
     /// Everything found, stops first.
     pub notes: Vec<MarginNote>,
+    /// What the next working may take over; equal for all.
+    pub(super) memory: super::sheet::Memory,
 }

@@ -162,6 +162,10 @@ pub enum NoteKind {
     },
     /// These feeders stand by.
     StandingBy { tags: Vec<String> },
+    /// The transformer's impedance is assumed: a lower one lets more current through.
+    ImpedanceAssumed { assumed: Ratio },
+    /// The supply voltage is missing: nothing can be sized.
+    SupplyVoltageMissing,
     /// Transformer or voltage is missing: no fault current.
     FaultCurrentUnknown,
     /// The incoming run is missing: the fault current is that at its start.
@@ -253,6 +257,8 @@ impl NoteKind {
             NoteKind::SourceHeatUnknown => "source-heat-unknown",
             NoteKind::TableFromMemory { .. } => "table-from-memory",
             NoteKind::StandingBy { .. } => "standing-by",
+            NoteKind::ImpedanceAssumed { .. } => "impedance-assumed",
+            NoteKind::SupplyVoltageMissing => "supply-voltage-missing",
             NoteKind::FaultCurrentUnknown => "fault-current-unknown",
             NoteKind::FaultRunUnknown => "fault-run-unknown",
             NoteKind::FaultConstantMissing { .. } => "fault-constant-missing",

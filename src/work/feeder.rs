@@ -1,0 +1,365 @@
+//! One feeder: its currents, conductors, device, reactor and heat.
+
+use super::WorkedFeeder;
+use crate::assume::{FeederInputs, Site, feeder as filled};
+use crate::math::reaches;
+use crate::quantity::{Current, Power, Ratio, Temperature, Voltage};
+use crate::sheet::Item;
+use crate::sizing::conductor::{Conductors, Demand, Surrounding, demand_of, size_run};
+use crate::sizing::current::{DriveInputBasis, drive_input, motor_full_load};
+use crate::sizing::device::{Device, DeviceInput, disconnect, size_branch_device};
+use crate::sizing::grounding::grounding_of;
+use crate::sizing::heat::{FeederHeat, device_loss, drive_loss, loss_inside, sum_of_heats};
+use crate::sizing::panel::FeederLoad;
+use crate::sizing::reactor::{Reactor, ReactorInput, reactor_of};
+use crate::sizing::rules;
+use crate::working::{
+    Amount, Field, Figure, Given, Grade, Holder, MarginNote, NoteKind, Run, RunField, Term,
+};
+use std::sync::Arc;
+
+/// A feeder, worked, with what its result depends on.
+#[derive(Debug, Clone, PartialEq)]
+pub(super) struct Feeder {
+    pub(super) worked: Arc<WorkedFeeder>,
+    /// What the incoming circuit sees of it; `None` where currents are missing.
+    pub(super) load: Option<FeederLoad>,
+    /// Limits of the drive, against which the enclosure's air and the site are held.
+    pub(super) inputs: FeederInputs,
+    /// The band of air inside for which the choices hold; `None` where the air inside is not known.
+    pub(super) air_band: Option<Temperature>,
+}
+
+/// Works one feeder for air inside in the band which ends at `air_band`.
+pub(super) fn work_feeder(item: &Item, site: &Site, air_band: Option<Temperature>) -> Feeder {
+    let inputs = filled(item, site, air_band);
+    let mut notes = Vec::new();
+    let parts = parts_of(&inputs, site, &mut notes);
+    let holder = Holder::Feeder(item.id);
+    let load = load_of(&inputs, &parts);
+    let mut notes: Vec<MarginNote> = notes.into_iter().map(|note| note.held_by(holder)).collect();
+    notes.sort_by_key(|note| note.grade);
+    let worked = WorkedFeeder {
+        id: item.id,
+        tag: inputs.tag.clone(),
+        load: inputs.load.clone(),
+        is_running: inputs.is_running,
+        motor_current: parts.motor_current,
+        drive_input: parts.drive_input,
+        ahead: parts.ahead,
+        behind: parts.behind,
+        drop_ratio: parts.drop_ratio,
+        device: parts.device,
+        disconnect: parts.disconnect,
+        reactor: parts.reactor,
+        heat: parts.heat,
+        short_circuit_rating: inputs.short_circuit_rating.clone(),
+        assumptions: inputs.assumptions.clone(),
+        notes,
+    };
+    Feeder {
+        worked: Arc::new(worked),
+        load,
+        inputs,
+        air_band,
+    }
+}
+
+/// What is worked of a feeder, piece by piece.
+#[derive(Default)]
+struct Parts {
+    motor_current: Option<Given<Current>>,
+    drive_input: Option<Given<Current>>,
+    ahead: Option<Conductors>,
+    behind: Option<Conductors>,
+    drop_ratio: Option<Arc<Figure>>,
+    device: Option<Device>,
+    disconnect: Option<Arc<Figure>>,
+    reactor: Reactor,
+    heat: FeederHeat,
+}
+
+fn parts_of(inputs: &FeederInputs, site: &Site, notes: &mut Vec<MarginNote>) -> Parts {
+    let is_without_load = inputs.motor_power.is_none()
+        && inputs.motor_current.is_none()
+        && inputs.drive_input.is_none();
+    if is_without_load {
+        notes.push(MarginNote::new(
+            Grade::Note,
+            Field::MotorPower,
+            NoteKind::NoLoad,
+        ));
+        return Parts::default();
+    }
+    let Some(supply) = &site.supply else {
+        return Parts::default();
+    };
+    let voltage = &supply.voltage;
+    let motor_current = motor_full_load(
+        inputs.motor_power.as_ref(),
+        inputs.motor_current.as_ref(),
+        voltage,
+        notes,
+    );
+    let drive_input = match &motor_current {
+        Some(motor_current) => drive_input(
+            inputs.drive_input.as_ref(),
+            &DriveInputBasis {
+                power: inputs.motor_power.as_ref(),
+                motor_current,
+                voltage,
+                smoothing: smoothing(inputs),
+            },
+            notes,
+        ),
+        None => inputs.drive_input.clone(),
+    };
+    let mut ahead = drive_input.as_ref().and_then(|current| {
+        let demand = demand_of(&rules::INPUT_AMPACITY, "I_in", current);
+        size(&inputs.ahead, &demand, voltage, notes)
+    });
+    let mut behind = motor_current.as_ref().and_then(|current| {
+        let demand = demand_of(&rules::OUTPUT_AMPACITY, "I_m", current);
+        size(&inputs.behind, &demand, voltage, notes)
+    });
+    let device = motor_current.as_ref().map(|motor_current| {
+        size_branch_device(
+            &device_input(inputs, motor_current, drive_input.as_ref()),
+            site.basis.edition(),
+            notes,
+        )
+    });
+    if let Some(rating) = device.as_ref().and_then(|device| device.rating.as_ref()) {
+        for conductors in [&mut ahead, &mut behind].into_iter().flatten() {
+            conductors.grounding = grounding_of(conductors, rating, notes);
+        }
+    }
+    let reactor = drive_input
+        .as_ref()
+        .map_or_else(Reactor::default, |drive_input| {
+            reactor_of(
+                &reactor_input(inputs, drive_input, motor_current.as_ref()),
+                supply,
+                notes,
+            )
+        });
+    let drop_ratio = drop_of_both(ahead.as_ref(), behind.as_ref(), notes);
+    let heat = heat_of(
+        inputs,
+        &HeatBasis {
+            drive_input: drive_input.as_ref(),
+            device: device.as_ref(),
+            reactor: &reactor,
+            runs: [ahead.as_ref(), behind.as_ref()],
+        },
+        notes,
+    );
+    Parts {
+        disconnect: drive_input.as_ref().map(disconnect),
+        motor_current,
+        drive_input,
+        ahead,
+        behind,
+        drop_ratio,
+        device,
+        reactor,
+        heat,
+    }
+}
+
+/// The larger of the drive's choke and the entered reactor.
+fn smoothing(inputs: &FeederInputs) -> Ratio {
+    match &inputs.reactor {
+        Some(reactor) if reactor.value > inputs.choke.value => reactor.value,
+        _ => inputs.choke.value,
+    }
+}
+
+fn size(
+    input: &crate::sizing::conductor::RunInput,
+    demand: &Demand,
+    voltage: &Given<Voltage>,
+    notes: &mut Vec<MarginNote>,
+) -> Option<Conductors> {
+    size_run(input, demand, voltage, notes)
+}
+
+fn device_input(
+    inputs: &FeederInputs,
+    motor_current: &Given<Current>,
+    drive_input: Option<&Given<Current>>,
+) -> DeviceInput {
+    DeviceInput {
+        device: inputs.device.clone(),
+        motor_current: motor_current.clone(),
+        drive_input: drive_input.cloned(),
+        permitted: inputs.permitted.clone(),
+        largest: inputs.largest.clone(),
+        rating: inputs.device_rating.clone(),
+    }
+}
+
+fn reactor_input(
+    inputs: &FeederInputs,
+    drive_input: &Given<Current>,
+    motor_current: Option<&Given<Current>>,
+) -> ReactorInput {
+    ReactorInput {
+        drive_input: drive_input.clone(),
+        motor_current: motor_current.cloned(),
+        motor_power: inputs.motor_power.clone(),
+        choke: inputs.choke.clone(),
+        percent: inputs.reactor.clone(),
+        reference: inputs.reference,
+        own_reference: inputs.own_reference.clone(),
+        loss: inputs.reactor_loss.clone(),
+    }
+}
+
+/// Drop which is advised at most for a branch circuit. Source: NEC 2023, 210.19(A), informational note: advice, no rule.
+const ADVISED_DROP: Ratio = Ratio::per_cent(3.0);
+
+fn drop_of_both(
+    ahead: Option<&Conductors>,
+    behind: Option<&Conductors>,
+    notes: &mut Vec<MarginNote>,
+) -> Option<Arc<Figure>> {
+    let parts: Vec<&Arc<Figure>> = [ahead, behind]
+        .into_iter()
+        .flatten()
+        .filter_map(|conductors| conductors.drop_ratio.as_ref())
+        .collect();
+    if parts.is_empty() {
+        return None;
+    }
+    let sum: f64 = parts
+        .iter()
+        .filter_map(|figure| figure.quantity::<Ratio>())
+        .map(Ratio::to_one)
+        .sum();
+    let drop = Ratio::of_one(sum);
+    let terms: Vec<Term> = parts
+        .into_iter()
+        .map(|figure| Term::of("d", figure))
+        .collect();
+    let figure = Arc::new(rules::DROP_BOTH.figure(drop, terms));
+    if !reaches(ADVISED_DROP.to_one(), drop.to_one()) {
+        notes.push(
+            MarginNote::new(
+                Grade::Note,
+                Field::Run(Run::Behind, RunField::Size),
+                NoteKind::DropAboveAdvice {
+                    drop,
+                    advised: ADVISED_DROP,
+                },
+            )
+            .about(&figure),
+        );
+    }
+    Some(figure)
+}
+
+/// What the heat of a feeder rests on.
+struct HeatBasis<'a> {
+    drive_input: Option<&'a Given<Current>>,
+    device: Option<&'a Device>,
+    reactor: &'a Reactor,
+    runs: [Option<&'a Conductors>; 2],
+}
+
+fn heat_of(
+    inputs: &FeederInputs,
+    basis: &HeatBasis<'_>,
+    notes: &mut Vec<MarginNote>,
+) -> FeederHeat {
+    let drive = drive_loss(inputs.drive_loss.clone(), inputs.motor_power.as_ref());
+    let drive_inside = drive
+        .as_ref()
+        .map(|loss| loss_inside(loss, &inputs.heatsink_share));
+    let reactor = basis
+        .reactor
+        .entered
+        .as_ref()
+        .and_then(|size| size.heat.clone());
+    let device = match (
+        basis.device.and_then(|device| device.rating.as_ref()),
+        basis.drive_input,
+    ) {
+        (Some(rating), Some(current)) => {
+            let (loss, _) = device_loss(
+                inputs.device_loss.clone(),
+                inputs.device.value,
+                rating,
+                current,
+            );
+            if loss.is_none() {
+                notes.push(MarginNote::new(
+                    Grade::Query,
+                    Field::DeviceLoss,
+                    NoteKind::DeviceLossUnknown {
+                        rating: rating.value,
+                    },
+                ));
+            }
+            loss
+        }
+        _ => inputs.device_loss.clone(),
+    };
+    let runs: Vec<Term> = basis
+        .runs
+        .into_iter()
+        .flatten()
+        .filter_map(|conductors| conductors.heat.as_ref())
+        .map(|figure| Term::of("P", figure))
+        .collect();
+    let conductors = (!runs.is_empty()).then(|| sum_of_heats(&rules::CONDUCTOR_HEAT, runs));
+    let parts: Vec<Term> = [
+        drive_inside.as_ref().map(|figure| Term::of("P", figure)),
+        conductors.as_ref().map(|figure| Term::of("P", figure)),
+    ]
+    .into_iter()
+    .chain([&reactor, &device].map(|part| part.as_ref().map(|loss: &Given<Power>| loss.term("P"))))
+    .flatten()
+    .collect();
+    let total = (!parts.is_empty()).then(|| sum_of_heats(&rules::FEEDER_HEAT, parts));
+    FeederHeat {
+        drive,
+        drive_inside,
+        reactor,
+        device,
+        conductors,
+        total,
+    }
+}
+
+fn load_of(inputs: &FeederInputs, parts: &Parts) -> Option<FeederLoad> {
+    let (drive_input, motor_current) = (parts.drive_input.as_ref()?, parts.motor_current.as_ref()?);
+    Some(FeederLoad {
+        is_running: inputs.is_running,
+        drive_input: drive_input.clone(),
+        motor_current: motor_current.clone(),
+        device: device_input(inputs, motor_current, Some(drive_input)),
+    })
+}
+
+impl WorkedFeeder {
+    /// The runs of the feeder which were worked.
+    pub fn runs(&self) -> impl Iterator<Item = &Conductors> {
+        [&self.ahead, &self.behind].into_iter().flatten()
+    }
+
+    /// Whether conductors of this feeder rest on the inside table.
+    pub(super) fn inside_sizes(&self) -> impl Iterator<Item = crate::quantity::WireSize> + '_ {
+        self.runs()
+            .filter(|conductors| matches!(conductors.input.surrounding, Surrounding::Inside { .. }))
+            .filter_map(Conductors::installed)
+    }
+
+    /// The heat of everything of this feeder inside.
+    pub fn heat_inside(&self) -> Option<Power> {
+        match self.heat.total.as_deref()?.value {
+            Amount::Measured { si, .. } => Some(Power::watts(si)),
+            _ => None,
+        }
+    }
+}
