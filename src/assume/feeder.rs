@@ -177,11 +177,19 @@ pub(super) fn run(
             terminal,
         ),
         conduit: mapped(
-            reader.choice_or(field(RunField::Conduit), Choice::SteelConduit),
+            reader.choice_or(field(RunField::Conduit), usual_conduit(run)),
             conduit,
         ),
         length,
         power_factor: reader.quantity_or(field(RunField::PowerFactor), Ratio::of_one(0.85)),
+    }
+}
+
+/// The cautious raceway: steel drops more voltage, and what is not magnetic lets more fault current through.
+fn usual_conduit(run: Run) -> Choice {
+    match run {
+        Run::Incoming => Choice::PvcConduit,
+        Run::Ahead | Run::Behind => Choice::SteelConduit,
     }
 }
 

@@ -76,6 +76,8 @@ pub struct SheetInputs {
     pub main_rating: Option<Given<Current>>,
     /// Short-circuit rating of the main device, where entered.
     pub main_short_circuit_rating: Option<Given<Current>>,
+    /// Loss of the main device, where entered.
+    pub main_loss: Option<Given<Power>>,
     /// Enclosure.
     pub enclosure: EnclosureInputs,
     /// What was assumed.
@@ -115,6 +117,7 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
     let source_fault = reader.quantity(Field::SourceFaultCurrent);
     let main_rating = reader.quantity(Field::MainRating);
     let main_short_circuit_rating = reader.quantity(Field::MainShortCircuitRating);
+    let main_loss = reader.quantity(Field::MainLoss);
     let enclosure = enclosure(&mut reader);
     SheetInputs {
         site: Site {
@@ -132,6 +135,7 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
         main,
         main_rating,
         main_short_circuit_rating,
+        main_loss,
         enclosure,
         assumptions: reader.into_assumptions(),
     }

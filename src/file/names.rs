@@ -33,6 +33,7 @@ pub fn field_name(field: Field) -> Cow<'static, str> {
         Field::MainType => "main_type",
         Field::MainRating => "main_rating",
         Field::MainShortCircuitRating => "main_short_circuit_rating",
+        Field::MainLoss => "main_loss",
         Field::EnclosureHeight => "enclosure_height",
         Field::EnclosureWidth => "enclosure_width",
         Field::EnclosureDepth => "enclosure_depth",

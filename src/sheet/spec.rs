@@ -143,6 +143,7 @@ pub fn fields_of(wanted: Home) -> Vec<Field> {
         .copied()
         .filter(|field| home(*field) == wanted)
         .chain(of_runs)
+        .filter(|field| *field != Field::Run(Run::Incoming, RunField::Place))
         .collect()
 }
 
@@ -222,7 +223,7 @@ pub fn spec(field: Field) -> Spec {
             Unit::WattPerSquareMetreKelvin,
         ),
         F::SunHeat | F::DriveLoss | F::SourceHeat => power(0.0, 200_000.0),
-        F::DeviceLoss | F::ReactorLoss => power(0.0, 20_000.0),
+        F::DeviceLoss | F::MainLoss | F::ReactorLoss => power(0.0, 20_000.0),
         F::SourceOutput => power(1.0, 200_000.0),
         F::SourceEfficiency => ratio(0.3, 1.0),
         F::SourceCurrent => current(0.0, 6_000.0, Unit::Ampere),
@@ -246,6 +247,8 @@ pub fn spec(field: Field) -> Spec {
         F::HeatsinkShare => ratio(0.0, 1.0),
         F::DriveChoke | F::ReactorPercent => ratio(0.0, 0.15),
 
+        // The incoming run comes from outside: it has no other place to choose.
+        F::Run(Run::Incoming, RunField::Place) => choice(&[Field]),
         F::Run(_, part) => of_run(part),
     }
 }

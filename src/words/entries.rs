@@ -4,8 +4,10 @@ use super::labels::choice;
 use super::numbers::{Rounding, counted, number, number_not_above, number_not_below};
 use super::units::{bare, bare_in, field_unit, size, whole, with_unit};
 use crate::assume::AssumedValue;
+use crate::entry::read;
+use crate::math::agree;
 use crate::sheet::{Choice, Entry, Measured, Shape, UnitSystem, spec};
-use crate::working::{Amount, Field, RunField};
+use crate::working::{Amount, Field, Run, RunField};
 
 /// What the filled cell of `field` shows, without the unit. A number typed in the unit shown stays as it was typed; any other
 /// is converted and rounded.
@@ -30,6 +32,22 @@ pub fn entry_with_unit(field: Field, entered: &Entry, system: UnitSystem) -> Str
     match (entered, field_unit(field, system)) {
         (Entry::Measured(_), Some(unit)) => with_unit(&text, unit),
         _ => text,
+    }
+}
+
+/// The text by which a filled cell opens for editing, or is copied: read again in the units of the sheet it gives the same
+/// entry. That is the text as typed; where it had no unit and the units of the sheet have changed since, with its unit.
+pub fn entry_to_edit(field: Field, entered: &Entry, system: UnitSystem) -> String {
+    let Entry::Measured(measured) = entered else {
+        return entry(field, entered, system);
+    };
+    match read(field, system, &measured.text) {
+        Ok(Some(Entry::Measured(again)))
+            if again.unit == measured.unit && agree(again.number, measured.number) =>
+        {
+            measured.text.clone()
+        }
+        _ => with_unit(&measured.number.to_string(), measured.unit),
     }
 }
 
@@ -155,11 +173,13 @@ pub const fn assumption_reason(field: Field) -> &'static str {
         Field::DeviceType => {
             "the first type which the drive's instructions permit, a time-delay fuse where they name none"
         }
-        Field::DeviceLoss => "the limit of the product standards, by the square of the current",
+        Field::DeviceLoss | Field::MainLoss => {
+            "the limit of the product standards, by the square of the current"
+        }
         Field::ReactorReference => "the usual base of a reactor's percentage",
         Field::ReactorLoss => "0.5 % of motor power",
         Field::SourceEfficiency => "a usual value for control supplies",
-        Field::Run(_, part) => match part {
+        Field::Run(which, part) => match part {
             RunField::Place => "the usual place of such a run",
             RunField::Length => "a usual length within an enclosure",
             RunField::Metal => "the usual metal",
@@ -168,6 +188,9 @@ pub const fn assumption_reason(field: Field) -> &'static str {
             RunField::Carrying => "the three phases alone",
             RunField::Insulation => "the usual insulation of such a run",
             RunField::Terminal => "the more cautious: no mark has been named",
+            RunField::Conduit if matches!(which, Run::Incoming) => {
+                "the more cautious for the fault current"
+            }
             RunField::Conduit => "the usual raceway, and the more cautious for the voltage drop",
             RunField::PowerFactor => "a usual value at full load",
             RunField::Size => "the smallest size which fits",

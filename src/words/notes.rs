@@ -634,8 +634,8 @@ fn lower_subject(tags: &[String]) -> String {
     }
 }
 
-/// A text of the person's, no longer than a sentence bears.
-fn shortened(text: &str) -> String {
+/// A text of the person's on one line, no longer than a sentence bears.
+pub(super) fn shortened(text: &str) -> String {
     const MOST: usize = 40;
     let flat = text.split_whitespace().collect::<Vec<_>>().join(" ");
     if flat.chars().count() <= MOST {

@@ -74,9 +74,7 @@ pub fn incoming_sentence() -> Vec<Piece> {
     vec![
         Text("The incoming run is "),
         incoming(RunField::Length),
-        Text(" long and lies "),
-        incoming(RunField::Place),
-        Text(": "),
+        Text(" long: "),
         incoming(RunField::Sets),
         Text(" "),
         incoming(RunField::Size),
@@ -107,7 +105,9 @@ pub fn main_sentence() -> Vec<Piece> {
         Value(Field::MainRating),
         Text(", with a short-circuit current rating of "),
         Value(Field::MainShortCircuitRating),
-        Text("."),
+        Text("; it loses "),
+        Value(Field::MainLoss),
+        Text(" at the running current."),
     ]
 }
 

@@ -63,8 +63,9 @@ pub(super) fn incoming_of(
     incoming
 }
 
-/// Loss of the main device, assumed from its limit at the running current.
+/// Loss of the main device: as entered, else assumed from its limit at the running current.
 pub(super) fn main_loss(
+    inputs: &SheetInputs,
     incoming: &IncomingCircuit,
     notes: &mut Vec<MarginNote>,
 ) -> Option<Given<Power>> {
@@ -73,11 +74,11 @@ pub(super) fn main_loss(
         main.rating.as_ref()?,
         Given::from_figure(incoming.running.as_ref()?)?,
     );
-    let (loss, _) = device_loss(None, main.device.value, rating, &current);
+    let (loss, _) = device_loss(inputs.main_loss.clone(), main.device.value, rating, &current);
     if loss.is_none() {
         notes.push(MarginNote::new(
             Grade::Query,
-            Field::MainRating,
+            Field::MainLoss,
             NoteKind::DeviceLossUnknown {
                 rating: rating.value,
             },

@@ -254,7 +254,7 @@ fn work_for(
         .collect();
     let mut notes = Vec::new();
     let incoming = incoming_of(inputs, &feeders, sources, &mut notes);
-    let main = main_loss(&incoming, &mut notes);
+    let main = main_loss(inputs, &incoming, &mut notes);
     let ledger = ledger_of(
         &feeders,
         sources,
@@ -429,6 +429,7 @@ fn assumed_device_ratings(
     let of_main = incoming
         .main
         .as_ref()
+        .filter(|_| inputs.main_loss.is_none())
         .and_then(|main| Some((inputs.main.value, main.rating.as_ref()?.value)))
         .filter(|(device, rating)| match device {
             DeviceType::InverseTimeBreaker => {

@@ -128,6 +128,8 @@ fields! {
     MainRating,
     /// Short-circuit current rating of the main device.
     MainShortCircuitRating,
+    /// Loss of the main device at the running current.
+    MainLoss,
     // Enclosure.
     /// Height outside.
     EnclosureHeight,
