@@ -6,9 +6,11 @@
 mod enclosure;
 mod feeder;
 mod ledger;
+mod notes;
 mod outcome;
 mod panel;
 mod sheet;
+mod totals;
 
 pub use outcome::{
     Ledger, LedgerGroup, LedgerRow, Total, TotalKind, Verdict, Worked, WorkedEnclosure,

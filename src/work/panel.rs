@@ -74,7 +74,12 @@ pub(super) fn main_loss(
         main.rating.as_ref()?,
         Given::from_figure(incoming.running.as_ref()?)?,
     );
-    let (loss, _) = device_loss(inputs.main_loss.clone(), main.device.value, rating, &current);
+    let (loss, _) = device_loss(
+        inputs.main_loss.clone(),
+        main.device.value,
+        rating,
+        &current,
+    );
     if loss.is_none() {
         notes.push(MarginNote::new(
             Grade::Query,
