@@ -54,8 +54,10 @@ fn a_file_of_the_newest_format_is_the_same_to_the_byte_when_written_again() {
 fn the_kept_files_of_the_newest_format_hold_every_name() {
     let mut kept = BTreeSet::new();
     for (_, text) in saved(FORMAT) {
-        let document = read(&text).expect("a shipped file opens");
-        kept.extend(names_in(&document));
+        // Whether it opens is asked above.
+        if let Ok(document) = read(&text) {
+            kept.extend(names_in(&document));
+        }
     }
     let mut wanted = BTreeSet::new();
     for home in [Home::Sheet, Home::Feeder, Home::Source] {
