@@ -112,9 +112,16 @@ fn largest_permitted(
     Some(figure)
 }
 
+/// The ratings by which a type is sized: Class CC fuses go by those of nontime-delay fuses, and where the class ends is
+/// worked afterwards.
+fn rating_list(device: DeviceType) -> DeviceType {
+    match device {
+        DeviceType::ClassCcFuse => DeviceType::NontimeDelayFuse,
+        other => other,
+    }
+}
+
 /// The product where it is a standard rating, else the next one up.
-///
-/// Class CC fuses go by the ratings of nontime-delay fuses here; where the class ends is worked afterwards.
 fn standard_rating(
     device: DeviceType,
     product: &Arc<Figure>,
@@ -122,11 +129,7 @@ fn standard_rating(
     notes: &mut Vec<MarginNote>,
 ) -> Option<(Current, Arc<Figure>)> {
     let amperes: Current = product.quantity()?;
-    let list = match device {
-        DeviceType::ClassCcFuse => DeviceType::NontimeDelayFuse,
-        other => other,
-    };
-    let Some(rating) = at_or_above(amperes, list, edition) else {
+    let Some(rating) = at_or_above(amperes, rating_list(device), edition) else {
         notes.push(
             MarginNote::new(
                 Grade::Stop,
@@ -154,7 +157,7 @@ fn held_by_drive(
     if reaches(limit.value.to_amperes(), by_rule.to_amperes()) {
         return Some((by_rule, by_rule_figure));
     }
-    let Some(taken) = at_or_below(limit.value, input.device.value, edition) else {
+    let Some(taken) = at_or_below(limit.value, rating_list(input.device.value), edition) else {
         notes.push(MarginNote::new(
             Grade::Stop,
             Field::LargestPermitted,

@@ -7,7 +7,7 @@ use crate::quantity::{Current, Power, Ratio, ShaftPower};
 use crate::sizing::rules;
 use crate::tables::DeviceType;
 use crate::tables::device_losses::{breaker_pole, fuse_link};
-use crate::working::{Figure, Given, Rule, Term};
+use crate::working::{Figure, Given, Rule, Term, sum_of_terms};
 use std::sync::Arc;
 
 /// The heat of a feeder's parts at full load. `None` where it could not be worked, or where there is no such part.
@@ -130,12 +130,6 @@ pub fn source_heat(
 
 /// The sum of several heats under one rule.
 pub fn sum_of_heats(rule: &'static Rule, parts: Vec<Term>) -> Arc<Figure> {
-    let watts = parts
-        .iter()
-        .filter_map(|part| match part.amount {
-            crate::working::Amount::Measured { si, .. } => Some(si),
-            _ => None,
-        })
-        .sum();
+    let watts = sum_of_terms(&parts);
     Arc::new(rule.figure(Power::watts(watts), parts))
 }

@@ -7,7 +7,7 @@ use crate::sizing::device::{DeviceInput, branch_for_main};
 use crate::sizing::rules;
 use crate::tables::nec_ratings::at_or_below;
 use crate::tables::{DeviceType, Edition};
-use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, Rule, Term};
+use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, Rule, Term, sum_of_terms};
 use std::sync::Arc;
 
 /// The main device, worked.
@@ -47,10 +47,8 @@ pub struct FeederLoad {
     pub is_running: bool,
     /// The drive's rated input current.
     pub drive_input: Given<Current>,
-    /// Motor full-load current.
-    pub motor_current: Given<Current>,
-    /// The branch device.
-    pub device: DeviceInput,
+    /// What its branch device is sized from; `None` where no motor is known, so that the main device cannot count it.
+    pub branch: Option<DeviceInput>,
 }
 
 /// Another load, whose current counts once.
@@ -140,16 +138,7 @@ impl<'a> Loads<'a> {
             .map(|load| load.drive_input.term("I_in"))
             .chain(self.others.iter().map(|load| load.current.term("I")))
             .collect();
-        if terms.is_empty() {
-            return None;
-        }
-        let sum: Current = self
-            .feeders
-            .iter()
-            .map(|load| load.drive_input.value)
-            .chain(self.others.iter().map(|load| load.current.value))
-            .sum();
-        Some(Arc::new(rule.figure(sum, terms)))
+        (!terms.is_empty()).then(|| sum_of(rule, terms))
     }
 
     /// 125 per cent of the largest drive input, 100 per cent of all else. Source: NEC 2023, 409.20, 430.24, 430.122(D).
@@ -159,19 +148,16 @@ impl<'a> Loads<'a> {
         }
         let largest = position_of_largest(self.feeders.iter().map(|load| load.drive_input.value));
         let first = largest.and_then(|position| self.feeders.get(position));
-        let others: Vec<(Current, Term)> = self
+        let others: Vec<Term> = self
             .feeders
             .iter()
             .enumerate()
             .filter(|(position, _)| Some(*position) != largest)
-            .map(|(_, load)| (load.drive_input.value, load.drive_input.term("I_in")))
-            .chain(
-                self.others
-                    .iter()
-                    .map(|load| (load.current.value, load.current.term("I"))),
-            )
+            .map(|(_, load)| load.drive_input.term("I_in"))
+            .chain(self.others.iter().map(|load| load.current.term("I")))
             .collect();
-        let (rest, rest_figure) = sum_of(&rules::OTHER_INPUTS, others);
+        let rest_figure = sum_of(&rules::OTHER_INPUTS, others);
+        let rest: Current = rest_figure.quantity()?;
         let (largest_value, largest_term) = match first {
             Some(load) => (load.drive_input.value, load.drive_input.term("I_1")),
             None => {
@@ -187,10 +173,9 @@ impl<'a> Loads<'a> {
     }
 }
 
-fn sum_of(rule: &'static Rule, parts: Vec<(Current, Term)>) -> (Current, Arc<Figure>) {
-    let sum: Current = parts.iter().map(|(current, _)| *current).sum();
-    let terms: Vec<Term> = parts.into_iter().map(|(_, term)| term).collect();
-    (sum, Arc::new(rule.figure(sum, terms)))
+fn sum_of(rule: &'static Rule, terms: Vec<Term>) -> Arc<Figure> {
+    let amperes = sum_of_terms(&terms);
+    Arc::new(rule.figure(Current::amperes(amperes), terms))
 }
 
 /// The first of the largest currents.
@@ -213,45 +198,32 @@ fn main_device(
     carried: &Arc<Figure>,
     notes: &mut Vec<MarginNote>,
 ) -> Option<MainDevice> {
-    let branches: Vec<(&FeederLoad, Current, Arc<Figure>)> = running
+    let branches: Vec<Branch<'_>> = running
         .feeders
         .iter()
-        .filter_map(|load| {
-            let (rating, figure) = branch_for_main(input.main.value, &load.device, input.edition)?;
-            Some((*load, rating, figure))
-        })
+        .filter_map(|load| Branch::of(load, input))
         .collect();
     let largest = position_of_largest_branch(&branches)?;
-    let (first, branch, branch_figure) = branches.get(largest)?;
+    let first = branches.get(largest)?;
     let branch_figure =
-        Arc::new(rules::BRANCH_FOR_MAIN.figure(*branch, [Term::of("I_n", branch_figure)]));
-    let rest: Vec<&&FeederLoad> = running
-        .feeders
-        .iter()
-        .filter(|load| !std::ptr::eq(**load, *first))
-        .collect();
-    let sum_with = |current_of: fn(&FeederLoad) -> &Given<Current>, symbol: &'static str| {
-        let parts = rest
+        Arc::new(rules::BRANCH_FOR_MAIN.figure(first.rating, [Term::of("I_n", &first.figure)]));
+    let sum_with = |current_of: fn(&Branch<'_>) -> Term| {
+        let parts = branches
             .iter()
-            .map(|load| (current_of(load).value, current_of(load).term(symbol)))
-            .chain(
-                running
-                    .others
-                    .iter()
-                    .map(|load| (load.current.value, load.current.term("I"))),
-            )
+            .enumerate()
+            .filter(|(position, _)| *position != largest)
+            .map(|(_, branch)| current_of(branch))
+            .chain(running.others.iter().map(|load| load.current.term("I")))
             .collect();
-        let (others, others_figure) = sum_of(&rules::OTHER_MOTORS, parts);
+        let others = sum_of(&rules::OTHER_MOTORS, parts);
+        let total = first.rating + others.quantity().unwrap_or(Current::amperes(0.0));
         Arc::new(rules::MAIN_SUM.figure(
-            *branch + others,
-            [
-                Term::of("I_b", &branch_figure),
-                Term::of("I_o", &others_figure),
-            ],
+            total,
+            [Term::of("I_b", &branch_figure), Term::of("I_o", &others)],
         ))
     };
-    let sum = sum_with(|load| &load.motor_current, "I_m");
-    let sum_by_inputs = sum_with(|load| &load.drive_input, "I_in");
+    let sum = sum_with(|branch| branch.motor_current.term("I_m"));
+    let sum_by_inputs = sum_with(|branch| branch.drive_input.term("I_in"));
     let (largest, rating) = main_rating(input, &sum, carried, notes);
     Some(MainDevice {
         device: input.main.clone(),
@@ -262,20 +234,41 @@ fn main_device(
     })
 }
 
+/// A branch as the main device counts it.
+struct Branch<'a> {
+    motor_current: &'a Given<Current>,
+    drive_input: &'a Given<Current>,
+    rating: Current,
+    figure: Arc<Figure>,
+}
+
+impl<'a> Branch<'a> {
+    fn of(load: &'a FeederLoad, input: &IncomingInput) -> Option<Self> {
+        let branch = load.branch.as_ref()?;
+        let (rating, figure) = branch_for_main(input.main.value, branch, input.edition)?;
+        Some(Self {
+            motor_current: &branch.motor_current,
+            drive_input: &load.drive_input,
+            rating,
+            figure,
+        })
+    }
+}
+
 /// Equal largest devices: the one with the larger motor current counts as the largest.
-fn position_of_largest_branch(branches: &[(&FeederLoad, Current, Arc<Figure>)]) -> Option<usize> {
-    let mut found: Option<(usize, Current, Current)> = None;
-    for (position, (load, rating, _)) in branches.iter().enumerate() {
-        let motor = load.motor_current.value;
-        let is_larger = found.is_none_or(|(_, largest, its_motor)| {
-            *rating > largest
-                || (agree(rating.to_amperes(), largest.to_amperes()) && motor > its_motor)
+fn position_of_largest_branch(branches: &[Branch<'_>]) -> Option<usize> {
+    let mut found: Option<(usize, &Branch<'_>)> = None;
+    for (position, branch) in branches.iter().enumerate() {
+        let is_larger = found.is_none_or(|(_, largest)| {
+            branch.rating > largest.rating
+                || (agree(branch.rating.to_amperes(), largest.rating.to_amperes())
+                    && branch.motor_current.value > largest.motor_current.value)
         });
         if is_larger {
-            found = Some((position, *rating, motor));
+            found = Some((position, branch));
         }
     }
-    found.map(|(position, _, _)| position)
+    found.map(|(position, _)| position)
 }
 
 fn main_rating(

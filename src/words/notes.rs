@@ -556,12 +556,12 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
         }
         NoteKind::MainIncomplete { tags } => said(
             format!(
-                "{} {} missing in the sum for the main device.",
+                "{} {} missing in the sums for the incoming conductors or the main device.",
                 subject(tags),
                 verb(tags, "is", "are")
             ),
-            "No branch device could be worked there, so the main device may come out too small.",
-            "Answer the notes there first.",
+            "Motor or drive current is not known there, so incoming conductors and main device come out too small.",
+            "Enter motor and drive input current there.",
         ),
         NoteKind::EnclosureUnknown => said(
             "The enclosure's measures are missing.",

@@ -333,12 +333,15 @@ fn heat_of(
 }
 
 fn load_of(inputs: &FeederInputs, parts: &Parts) -> Option<FeederLoad> {
-    let (drive_input, motor_current) = (parts.drive_input.as_ref()?, parts.motor_current.as_ref()?);
+    let drive_input = parts.drive_input.as_ref()?;
+    let branch = parts
+        .motor_current
+        .as_ref()
+        .map(|motor_current| device_input(inputs, motor_current, Some(drive_input)));
     Some(FeederLoad {
         is_running: inputs.is_running,
         drive_input: drive_input.clone(),
-        motor_current: motor_current.clone(),
-        device: device_input(inputs, motor_current, Some(drive_input)),
+        branch,
     })
 }
 

@@ -43,16 +43,18 @@ pub(super) fn note_sheet(
     let has_load = |feeder: &Feeder| {
         feeder.worked.motor_current.is_some() || feeder.worked.drive_input.is_some()
     };
-    let without_device = tags(feeders, |feeder| {
-        feeder.worked.is_running && has_load(feeder) && feeder.load.is_none()
+    let uncounted = tags(feeders, |feeder| {
+        let is_counted = feeder
+            .load
+            .as_ref()
+            .is_some_and(|load| load.branch.is_some());
+        feeder.worked.is_running && has_load(feeder) && !is_counted
     });
-    if !without_device.is_empty() && incoming.main.is_some() {
+    if !uncounted.is_empty() {
         tell(
             Grade::Query,
             Field::MainType,
-            NoteKind::MainIncomplete {
-                tags: without_device,
-            },
+            NoteKind::MainIncomplete { tags: uncounted },
         );
     }
     let without_heat = tags(feeders, |feeder| {

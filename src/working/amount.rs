@@ -96,6 +96,17 @@ impl Term {
     }
 }
 
+/// The sum of the measured terms of a [`super::Form::Sum`] rule, in SI.
+pub fn sum_of_terms(terms: &[Term]) -> f64 {
+    terms
+        .iter()
+        .filter_map(|term| match term.amount {
+            Amount::Measured { si, .. } => Some(si),
+            Amount::Count(_) | Amount::Size(_) => None,
+        })
+        .sum()
+}
+
 /// One worked (or assumed) value with its working: a tree whose leaves are entered and assumed values.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Figure {

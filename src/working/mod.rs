@@ -8,7 +8,7 @@ mod notes;
 mod place;
 pub mod sources;
 
-pub use amount::{Amount, Figure, Given, Ink, Origin, Term};
+pub use amount::{Amount, Figure, Given, Ink, Origin, Term, sum_of_terms};
 pub use notes::{Caution, Grade, MarginNote, MemoryTable, NoteKind, ReactorReason};
 pub use place::{Field, Holder, HolderId, Place, Run, RunField};
 
