@@ -6,6 +6,7 @@ use super::units::{bare, bare_in, field_unit, size, whole, with_unit};
 use crate::assume::AssumedValue;
 use crate::entry::read;
 use crate::math::agree;
+use crate::quantity::Unit;
 use crate::sheet::{Choice, Entry, Measured, Shape, UnitSystem, spec};
 use crate::working::{Amount, Field, Run, RunField};
 
@@ -46,6 +47,11 @@ pub fn entry_to_edit(field: Field, entered: &Entry, system: UnitSystem) -> Strin
             if again.unit == measured.unit && agree(again.number, measured.number) =>
         {
             measured.text.clone()
+        }
+        // A plain share can stand in a file, but not be typed.
+        _ if measured.unit == Unit::One => {
+            let shown = Unit::PerCent;
+            with_unit(&shown.from_si(measured.si()).to_string(), shown)
         }
         _ => with_unit(&measured.number.to_string(), measured.unit),
     }

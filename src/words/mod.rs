@@ -12,6 +12,7 @@ mod labels;
 mod notes;
 pub mod numbers;
 pub mod page;
+mod refusals;
 mod rules;
 mod sentences;
 mod units;
@@ -20,13 +21,14 @@ mod working;
 pub use cautions::{CautionWords, caution, caution_line};
 pub use entries::{
     accepted, amount_of_field, amount_of_field_with_unit, assumed, assumed_with_unit,
-    assumption_reason, entry, entry_with_unit,
+    assumption_reason, entry, entry_to_edit, entry_with_unit,
 };
 pub use labels::{
     choice, grade, grade_meaning, head, ink, known, label, ledger_group, limit, run, run_field,
     total, verdict,
 };
 pub use notes::{NoteWords, memory_table, note, place, reactor_reason};
+pub use refusals::{entry_refusal, file_refusal};
 pub use rules::{rule_title, symbol_for};
 pub use sentences::{
     Piece, assumed_in_sentence, enclosure_sentence, entry_in_sentence, fields, gap, in_sentence,

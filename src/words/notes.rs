@@ -470,7 +470,7 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
                 "The transformer's impedance is assumed at {}.",
                 quantity(*assumed, system)
             ),
-            "Real impedances of small transformers run down to 2 per cent, and a lower one lets more fault current through.",
+            "Impedances of small transformers run down to 2 %, and a lower one lets more fault current through.",
             "Enter the impedance from the transformer's nameplate.",
         ),
         NoteKind::SupplyVoltageMissing => said(

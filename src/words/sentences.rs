@@ -232,6 +232,7 @@ pub const fn gap(field: Field) -> &'static str {
     match field {
         Field::SourceFaultCurrent => "worked from the transformer",
         Field::MainRating => "the largest rating permitted",
+        Field::MainLoss => "as much as the product standards allow",
         Field::WallCoefficient => "by the material",
         Field::SunHeat => "no heat entered",
         Field::InstalledAirflow => "an airflow not entered",
@@ -242,6 +243,6 @@ pub const fn gap(field: Field) -> &'static str {
         Field::EnclosureHeight | Field::EnclosureWidth | Field::EnclosureDepth => {
             "a measure not entered"
         }
-        _ => "not entered",
+        _ => "a value not entered",
     }
 }
