@@ -2,7 +2,7 @@
 
 use super::{Ledger, WorkedEnclosure};
 use crate::assume::SheetInputs;
-use crate::quantity::{Power, Temperature};
+use crate::quantity::{AirFlow, Power, Temperature};
 use crate::sizing::air::{Air, AirInput, SMALLEST_RISE, Walls, air_of};
 use crate::tables::nec_conductors::AMBIENT_BANDS;
 use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind};
@@ -106,9 +106,12 @@ fn note_airflow(inputs: &SheetInputs, air: &Air, notes: &mut Vec<MarginNote>) {
     let Some(figure) = &air.airflow else {
         return;
     };
-    let Some(needed) = figure.quantity::<crate::quantity::AirFlow>() else {
+    let Some(needed) = figure.quantity::<AirFlow>() else {
         return;
     };
+    if needed <= AirFlow::cubic_metres_per_second(0.0) {
+        return;
+    }
     let field = Field::InstalledAirflow;
     let kind = match &inputs.enclosure.installed_airflow {
         None => NoteKind::AirflowUnknown { needed },

@@ -67,7 +67,14 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
         sources.iter().map(|(worked, _)| worked.clone()).collect();
     let settled = settle(sheet, &inputs, &worked_sources, memory);
     let mut notes = settled.notes;
-    let fault = fault_of(&inputs, &settled.incoming, &mut notes);
+    let mut fault_notes = Vec::new();
+    let fault = fault_of(&inputs, &settled.incoming, &mut fault_notes);
+    // A sheet without feeders has nothing yet which could meet a fault.
+    notes.extend(
+        fault_notes
+            .into_iter()
+            .filter(|_| !sheet.feeders.is_empty()),
+    );
     let ratings = ratings_of(&inputs, &settled.feeders, &fault, &mut notes);
     let heat: Power = settled
         .ledger
