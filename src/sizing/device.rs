@@ -76,7 +76,12 @@ pub fn size_branch_device(
 /// The percentage of Table 430.52(C)(1) times motor full-load current.
 fn product(device: DeviceType, motor_current: &Given<Current>) -> Arc<Figure> {
     let percentage = largest_ratio(device);
-    let percentage_figure = Arc::new(rules::DEVICE_PERCENTAGE.figure(percentage, Vec::new()));
+    let column = match device {
+        DeviceType::TimeDelayFuse => &rules::TIME_DELAY_PERCENTAGE,
+        DeviceType::NontimeDelayFuse | DeviceType::ClassCcFuse => &rules::NONTIME_DELAY_PERCENTAGE,
+        DeviceType::InverseTimeBreaker => &rules::BREAKER_PERCENTAGE,
+    };
+    let percentage_figure = Arc::new(column.figure(percentage, Vec::new()));
     Arc::new(rules::DEVICE_PRODUCT.figure(
         share_of(percentage, motor_current.value),
         [Term::of("p", &percentage_figure), motor_current.term("I_m")],

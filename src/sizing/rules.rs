@@ -266,13 +266,33 @@ pub static RUN_HEAT: Rule = Rule {
     known: Known::Derived,
 };
 
-/// Largest device as a ratio of motor full-load current.
-pub static DEVICE_PERCENTAGE: Rule = Rule {
-    id: "sizing.device.percentage",
+/// Largest device as a ratio of motor full-load current, column dual-element time-delay fuse.
+pub static TIME_DELAY_PERCENTAGE: Rule = Rule {
+    id: "sizing.device.time_delay_percentage",
     gives: "p",
     form: Form::Lookup,
     source: &NEC,
-    clause: "Table 430.52(C)(1)",
+    clause: "Table 430.52(C)(1), dual-element time-delay fuse",
+    known: Known::CrossChecked,
+};
+
+/// Largest device as a ratio of motor full-load current, column nontime-delay fuse, also Class CC.
+pub static NONTIME_DELAY_PERCENTAGE: Rule = Rule {
+    id: "sizing.device.nontime_delay_percentage",
+    gives: "p",
+    form: Form::Lookup,
+    source: &NEC,
+    clause: "Table 430.52(C)(1), nontime-delay fuse, also Class CC",
+    known: Known::CrossChecked,
+};
+
+/// Largest device as a ratio of motor full-load current, column inverse time breaker.
+pub static BREAKER_PERCENTAGE: Rule = Rule {
+    id: "sizing.device.breaker_percentage",
+    gives: "p",
+    form: Form::Lookup,
+    source: &NEC,
+    clause: "Table 430.52(C)(1), inverse time breaker",
     known: Known::CrossChecked,
 };
 
@@ -902,7 +922,9 @@ pub fn all() -> Vec<&'static Rule> {
         &DROP_BOTH,
         &TABLE_8_RESISTANCE,
         &RUN_HEAT,
-        &DEVICE_PERCENTAGE,
+        &TIME_DELAY_PERCENTAGE,
+        &NONTIME_DELAY_PERCENTAGE,
+        &BREAKER_PERCENTAGE,
         &DEVICE_PRODUCT,
         &DEVICE_STANDARD,
         &DEVICE_CLASS_CC,

@@ -355,7 +355,9 @@ fn ratio_unit(rule: &Rule) -> Unit {
     match rule.id {
         "sizing.drop.ratio"
         | "sizing.drop.both_runs"
-        | "sizing.device.percentage"
+        | "sizing.device.time_delay_percentage"
+        | "sizing.device.nontime_delay_percentage"
+        | "sizing.device.breaker_percentage"
         | "physics.circuit.impedance_on_base" => Unit::PerCent,
         _ => Unit::One,
     }
