@@ -443,6 +443,32 @@ fn assumed_values_show_in_the_unit_of_their_field() {
 }
 
 #[test]
+fn what_several_feeders_have_assumed_stands_on_one_line() {
+    let at = |id: u32, choice: Choice| ventrail::assume::Assumption {
+        place: Place {
+            holder: Holder::Feeder(HolderId(id)),
+            field: Field::Run(Run::Behind, RunField::Metal),
+        },
+        value: AssumedValue::Choice(choice),
+    };
+    let of_sheet = ventrail::assume::Assumption {
+        place: Place {
+            holder: Holder::Sheet,
+            field: Field::RoomAmbient,
+        },
+        value: AssumedValue::Amount(Temperature::celsius(40.0).into()),
+    };
+    let assumptions = [at(1, Choice::Copper), of_sheet, at(2, Choice::Copper)];
+    let lines = words::assumption_lines(&assumptions, UnitSystem::Us, |id| format!("P-{}", id.0));
+    let [room, metal] = lines.as_slice() else {
+        panic!("two lines expected: {lines:?}");
+    };
+    assert_eq!((room.value.as_str(), room.holders.len()), ("104 °F", 0));
+    assert_eq!(metal.value, "copper");
+    assert_eq!(metal.holders, ["P-1", "P-2"]);
+}
+
+#[test]
 fn what_an_answer_is_called_can_be_typed() {
     for field in every_field() {
         let (Shape::Choice(offered) | Shape::Choices(offered)) = spec(field).shape else {
@@ -943,6 +969,15 @@ fn a_place_names_its_feeder_and_its_subject() {
         at(Holder::Sheet, Field::Run(Run::Incoming, RunField::Length)),
         "Incoming conductors"
     );
+    let in_full = |holder, field| words::place_in_full(&Place { holder, field }, tag);
+    assert_eq!(
+        in_full(feeder, Field::Run(Run::Ahead, RunField::Length)),
+        "P-402, ahead of the drive, length one way"
+    );
+    assert_eq!(
+        in_full(Holder::Sheet, Field::Altitude),
+        "Height above sea level"
+    );
 }
 
 #[test]
@@ -1239,6 +1274,19 @@ fn roots_squares_and_greek_letters_are_shown_as_such() {
 }
 
 #[test]
+fn sources_carry_their_year() {
+    use ventrail::working::sources;
+    assert_eq!(words::source_name(&sources::NEC), "NEC 2023");
+    assert_eq!(
+        words::source_name(&sources::IEC_60898_1),
+        "IEC 60898-1:2015"
+    );
+    assert_eq!(words::source_name(&sources::UL_508A), "UL 508A");
+    assert_clean(&words::source_in_full(&sources::UL_508A));
+    assert_clean(&words::source_in_full(&sources::PHYSICS));
+}
+
+#[test]
 fn a_rule_known_from_memory_says_so() {
     let figure = rules::DISCONNECT.figure(Current::amperes(62.1), Vec::new());
     assert_eq!(
@@ -1369,6 +1417,25 @@ proptest! {
                     }
                 }
                 assert_clean(&words::working_flat(&figure, system));
+            }
+            for feeder in &worked.feeders {
+                for run in [&feeder.ahead, &feeder.behind].into_iter().flatten() {
+                    assert_sentence(&words::size_found(run, system));
+                    prop_assert_eq!(words::installed(run).is_some(), run.installed().is_some());
+                }
+                let device = feeder.device.as_ref();
+                if let Some(text) = device.and_then(|device| words::branch_device(device, system)) {
+                    assert_clean(&text);
+                }
+            }
+            for total in &worked.totals {
+                let said = words::total_words(total, system);
+                if total.verdict == Verdict::Beyond {
+                    prop_assert_ne!(&said.running, &said.limit);
+                }
+                for text in [said.running, said.connected, said.limit].iter().flatten() {
+                    assert_clean(text);
+                }
             }
             for assumption in &worked.assumptions {
                 let field = assumption.place.field;

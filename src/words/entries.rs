@@ -1,14 +1,15 @@
 //! Entered and assumed values as text, in the units of the sheet, and why a value is assumed.
 
-use super::labels::choice;
+use super::labels::{choice, label};
 use super::numbers::{Rounding, counted, number, number_not_above, number_not_below};
 use super::units::{bare, bare_in, field_unit, size, whole, with_unit};
-use crate::assume::AssumedValue;
+use crate::assume::{AssumedValue, Assumption};
 use crate::entry::read;
 use crate::math::agree;
 use crate::quantity::Unit;
 use crate::sheet::{Choice, Entry, Measured, Shape, UnitSystem, spec};
-use crate::working::{Amount, Field, Run, RunField};
+use crate::working::{Amount, Field, Holder, HolderId, Run, RunField};
+use std::collections::BTreeMap;
 
 /// What the filled cell of `field` shows, without the unit. A number typed in the unit shown stays as it was typed; any other
 /// is converted and rounded.
@@ -73,6 +74,47 @@ pub fn assumed_with_unit(field: Field, value: &AssumedValue, system: UnitSystem)
         (AssumedValue::Amount(Amount::Measured { .. }), Some(unit)) => with_unit(&text, unit),
         _ => text,
     }
+}
+
+/// One line of the list of assumptions: a value which one or several holders share.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub struct AssumptionLine {
+    /// The field.
+    pub label: &'static str,
+    /// The value with its unit.
+    pub value: String,
+    /// Why it is so.
+    pub reason: &'static str,
+    /// The tags of the feeders or sources it was assumed for; empty for the sheet itself.
+    pub holders: Vec<String>,
+}
+
+/// Everything assumed, each field with each of its values once, in the order of the fields. `tag` gives the name of a
+/// feeder or of a source of heat.
+pub fn assumption_lines(
+    assumptions: &[Assumption],
+    system: UnitSystem,
+    tag: impl Fn(HolderId) -> String,
+) -> Vec<AssumptionLine> {
+    let mut lines: BTreeMap<(Field, String), Vec<String>> = BTreeMap::new();
+    for assumption in assumptions {
+        let field = assumption.place.field;
+        let value = assumed_with_unit(field, &assumption.value, system);
+        let holders = lines.entry((field, value)).or_default();
+        match assumption.place.holder {
+            Holder::Sheet => {}
+            Holder::Feeder(id) | Holder::Source(id) => holders.push(tag(id)),
+        }
+    }
+    lines
+        .into_iter()
+        .map(|((field, value), holders)| AssumptionLine {
+            label: label(field),
+            value,
+            reason: assumption_reason(field),
+            holders,
+        })
+        .collect()
 }
 
 /// An amount in the unit of `field`, without the unit.

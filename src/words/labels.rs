@@ -200,6 +200,15 @@ pub const fn run(run: Run) -> &'static str {
     }
 }
 
+/// Where a run is, behind the name of something which belongs to it.
+pub const fn run_where(run: Run) -> &'static str {
+    match run {
+        Run::Incoming => "of the incoming run",
+        Run::Ahead => "ahead of the drive",
+        Run::Behind => "behind the drive",
+    }
+}
+
 /// A field of a run, under the heading of its run.
 pub const fn run_field(part: RunField) -> &'static str {
     match part {

@@ -11,6 +11,7 @@ mod formulas;
 mod labels;
 mod notes;
 pub mod numbers;
+mod outcomes;
 pub mod page;
 mod refusals;
 mod rules;
@@ -20,14 +21,17 @@ mod working;
 
 pub use cautions::{CautionWords, caution, caution_line};
 pub use entries::{
-    accepted, amount_of_field, amount_of_field_with_unit, assumed, assumed_with_unit,
-    assumption_reason, entry, entry_to_edit, entry_with_unit,
+    AssumptionLine, accepted, amount_of_field, amount_of_field_with_unit, assumed,
+    assumed_with_unit, assumption_lines, assumption_reason, entry, entry_to_edit, entry_with_unit,
 };
 pub use labels::{
     choice, grade, grade_meaning, head, ink, known, label, ledger_group, limit, run, run_field,
-    total, verdict,
+    run_where, total, verdict,
 };
-pub use notes::{NoteWords, memory_table, note, place, reactor_reason};
+pub use notes::{NoteWords, memory_table, note, place, place_in_full, reactor_reason};
+pub use outcomes::{
+    TotalWords, branch_device, decided_by, installed, metal, reactor, size_found, total_words,
+};
 pub use refusals::{entry_refusal, file_refusal};
 pub use rules::{rule_title, symbol_for};
 pub use sentences::{

@@ -1,10 +1,10 @@
 //! Margin notes in words: what was found, why it matters, what to do about it.
 
 use super::entries::accepted;
-use super::labels::{label, lower_first, run, upper_first};
+use super::labels::{label, lower_first, run, run_where, upper_first};
 use super::page::listed;
-use super::units::{quantities_apart, quantity, size};
-use crate::quantity::Temperature;
+use super::units::{quantities_apart, quantity, size, with_unit};
+use crate::quantity::{Temperature, Unit, WireSize};
 use crate::sheet::UnitSystem;
 use crate::working::{
     Field, Holder, HolderId, MarginNote, MemoryTable, NoteKind, Place, ReactorReason,
@@ -19,75 +19,6 @@ pub struct NoteWords {
     pub why: String,
     /// What to do about it.
     pub remedy: String,
-}
-
-/// Where a note or an edit is: `P-402, conductors ahead of the drive`. `tag` gives the name of a feeder or a source of heat.
-pub fn place(place: &Place, tag: impl Fn(HolderId) -> String) -> String {
-    let about = match place.field {
-        Field::Run(which, _) => run(which).to_owned(),
-        field => lower_first(label(field)),
-    };
-    match place.holder {
-        Holder::Sheet => upper_first(&about),
-        Holder::Feeder(id) | Holder::Source(id) => format!("{}, {about}", tag(id)),
-    }
-}
-
-/// A table known from memory, as a sentence names it.
-pub const fn memory_table(table: MemoryTable) -> &'static str {
-    match table {
-        MemoryTable::InsideAmpacity => "UL 508A, Table 28.1 (conductors inside)",
-        MemoryTable::FieldAmpacity => "NEC 2023, Table 310.16 (conductors in the field)",
-        MemoryTable::FaultConstants => "the C constants of the point-to-point method",
-        MemoryTable::BreakerLoss => "the largest losses of breakers (IEC 60898-1)",
-        MemoryTable::FuseLoss => "the largest losses of fuse links (IEC 60269-2)",
-    }
-}
-
-/// A reason to ask for an input reactor, as a clause.
-pub const fn reactor_reason(reason: ReactorReason) -> &'static str {
-    match reason {
-        ReactorReason::SourcePower => {
-            "the source is at least ten times the drive's power, and 500 kVA or more"
-        }
-        ReactorReason::SourceImpedance => "the source's impedance is under 1 % on the drive's base",
-        ReactorReason::Unbalance => "the line voltages differ more than drives bear well",
-        ReactorReason::Capacitors => "power-factor capacitors are switched on the bus",
-        ReactorReason::Surges => "the supply is prone to surges",
-    }
-}
-
-/// Reasons in a row, as one sentence.
-fn reasons_sentence(reasons: &[ReactorReason]) -> String {
-    let clauses: Vec<String> = reasons
-        .iter()
-        .map(|reason| reactor_reason(*reason).to_owned())
-        .collect();
-    match clauses.as_slice() {
-        [] => "Practice asks for it.".to_owned(),
-        clauses => format!("{}.", upper_first(&listed(clauses))),
-    }
-}
-
-/// Tags as the subject of a sentence.
-fn subject(tags: &[String]) -> String {
-    match tags {
-        [] => "Something".to_owned(),
-        tags => listed(tags),
-    }
-}
-
-/// The verb behind [`subject`].
-fn verb<'a>(tags: &[String], of_one: &'a str, of_many: &'a str) -> &'a str {
-    if tags.len() > 1 { of_many } else { of_one }
-}
-
-fn said(what: impl Into<String>, why: impl Into<String>, remedy: impl Into<String>) -> NoteWords {
-    NoteWords {
-        what: what.into(),
-        why: why.into(),
-        remedy: remedy.into(),
-    }
 }
 
 /// The words of a margin note in the units of the sheet.
@@ -367,8 +298,8 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
             size: wire,
         } => said(
             format!(
-                "The equipment grounding conductor of the {} is held at {}.",
-                run(*which),
+                "The equipment grounding conductor {} is held at {}.",
+                run_where(*which),
                 size(*wire)
             ),
             "It need not be larger than the phase conductors of its raceway (NEC 2023, 250.122(A)).",
@@ -451,11 +382,15 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
                     "Cells of {} are known only from memory.",
                     memory_table(*table)
                 ),
-                rows => format!(
-                    "Cells of {} are known only from memory: {}.",
-                    memory_table(*table),
-                    listed(rows)
-                ),
+                rows => {
+                    let rows: Vec<String> =
+                        rows.iter().map(|row| memory_row(*table, row)).collect();
+                    format!(
+                        "Cells of {} are known only from memory: {}.",
+                        memory_table(*table),
+                        listed(&rows)
+                    )
+                }
             },
             "No page with them could be read, so they may differ from your copy.",
             "Compare them with your own copy and answer here.",
@@ -623,6 +558,95 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
             "Hotter air asks for larger conductors, and larger conductors give off less heat. Between two sizes no temperature fits exactly, so the larger size and the warmer air stand.",
             "Nothing needs to be done.",
         ),
+    }
+}
+
+/// Where a note or an edit is: `P-402, conductors ahead of the drive`. `tag` gives the name of a feeder or a source of heat.
+pub fn place(place: &Place, tag: impl Fn(HolderId) -> String) -> String {
+    let about = match place.field {
+        Field::Run(which, _) => run(which).to_owned(),
+        field => lower_first(label(field)),
+    };
+    match place.holder {
+        Holder::Sheet => upper_first(&about),
+        Holder::Feeder(id) | Holder::Source(id) => format!("{}, {about}", tag(id)),
+    }
+}
+
+/// As [`place`], with the field of a run as well: `P-402, ahead of the drive, length one way`.
+pub fn place_in_full(place: &Place, tag: impl Fn(HolderId) -> String) -> String {
+    match place.holder {
+        Holder::Sheet => label(place.field).to_owned(),
+        Holder::Feeder(id) | Holder::Source(id) => {
+            format!("{}, {}", tag(id), lower_first(label(place.field)))
+        }
+    }
+}
+
+/// A table known from memory, as a sentence names it.
+pub const fn memory_table(table: MemoryTable) -> &'static str {
+    match table {
+        MemoryTable::InsideAmpacity => "UL 508A, Table 28.1 (conductors inside)",
+        MemoryTable::FieldAmpacity => "NEC 2023, Table 310.16 (conductors in the field)",
+        MemoryTable::FaultConstants => "the C constants of the point-to-point method",
+        MemoryTable::BreakerLoss => "the largest losses of breakers (IEC 60898-1)",
+        MemoryTable::FuseLoss => "the largest losses of fuse links (IEC 60269-2)",
+    }
+}
+
+/// A row of such a table as the trade names it: sizes with their scale, ratings with their unit.
+fn memory_row(table: MemoryTable, row: &str) -> String {
+    match table {
+        MemoryTable::InsideAmpacity | MemoryTable::FieldAmpacity | MemoryTable::FaultConstants => {
+            WireSize::from_number(row).map_or_else(|| row.to_owned(), size)
+        }
+        MemoryTable::BreakerLoss | MemoryTable::FuseLoss => with_unit(row, Unit::Ampere),
+    }
+}
+
+/// A reason to ask for an input reactor, as a clause.
+pub const fn reactor_reason(reason: ReactorReason) -> &'static str {
+    match reason {
+        ReactorReason::SourcePower => {
+            "the source is at least ten times the drive's power, and 500 kVA or more"
+        }
+        ReactorReason::SourceImpedance => "the source's impedance is under 1 % on the drive's base",
+        ReactorReason::Unbalance => "the line voltages differ more than drives bear well",
+        ReactorReason::Capacitors => "power-factor capacitors are switched on the bus",
+        ReactorReason::Surges => "the supply is prone to surges",
+    }
+}
+
+/// Reasons in a row, as one sentence.
+fn reasons_sentence(reasons: &[ReactorReason]) -> String {
+    let clauses: Vec<String> = reasons
+        .iter()
+        .map(|reason| reactor_reason(*reason).to_owned())
+        .collect();
+    match clauses.as_slice() {
+        [] => "Practice asks for it.".to_owned(),
+        clauses => format!("{}.", upper_first(&clauses.join("; "))),
+    }
+}
+
+/// Tags as the subject of a sentence.
+fn subject(tags: &[String]) -> String {
+    match tags {
+        [] => "Something".to_owned(),
+        tags => listed(tags),
+    }
+}
+
+/// The verb behind [`subject`].
+fn verb<'a>(tags: &[String], of_one: &'a str, of_many: &'a str) -> &'a str {
+    if tags.len() > 1 { of_many } else { of_one }
+}
+
+fn said(what: impl Into<String>, why: impl Into<String>, remedy: impl Into<String>) -> NoteWords {
+    NoteWords {
+        what: what.into(),
+        why: why.into(),
+        remedy: remedy.into(),
     }
 }
 

@@ -1,7 +1,7 @@
 //! Number formats: how many digits are shown, grouping, the sign.
 //!
 //! Here: [`number`], and the rounding of each unit. Not here: unit symbols. A second number format (decimal comma)
-//! would change [`punctuate`] alone.
+//! would change `punctuate` alone.
 
 use crate::quantity::Unit;
 
@@ -20,13 +20,6 @@ pub enum Rounding {
     /// Every digit of the number.
     Exact,
 }
-
-/// Relative allowance which lifts a tie (`3.125` at two decimals) over the last bit, so that it is rounded away from nought
-/// as people do it.
-const TIE: f64 = 1e-12;
-
-/// Decimals beyond which no number is shown.
-const MOST_DECIMALS: usize = 15;
 
 /// `value` as text: rounded, grouped in thousands, with a true minus sign. A value which is not nought never shows as
 /// nought: it keeps its first digit.
@@ -47,6 +40,13 @@ pub fn number(value: f64, rounding: Rounding) -> String {
     };
     punctuate(value < 0.0, &plain)
 }
+
+/// Relative allowance which lifts a tie (`3.125` at two decimals) over the last bit, so that it is rounded away from nought
+/// as people do it.
+const TIE: f64 = 1e-12;
+
+/// Decimals beyond which no number is shown.
+const MOST_DECIMALS: usize = 15;
 
 /// `size`, not negative, at `decimals`, or at the first digit which is not nought.
 fn fixed(size: f64, decimals: usize) -> String {
@@ -157,7 +157,7 @@ pub fn rounding(unit: Unit, number: f64) -> Rounding {
         Unit::CubicMetrePerSecond => digits(3, 4),
         Unit::CubicMetrePerHour | Unit::CubicFootPerMinute => whole_above(100.0),
         Unit::MetrePerOhm | Unit::FootPerOhm => Rounding::Decimals(0),
-        Unit::One => digits(4, 4),
+        Unit::One => digits(4, 6),
         Unit::PerCent => digits(3, 2),
     }
 }

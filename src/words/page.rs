@@ -1,6 +1,6 @@
 //! Every other text of the page and of the printed summary: headings, buttons, help, status, files, keys.
 //!
-//! Here: fixed texts, one line each in [`texts!`], and the few which carry a value. Not here: names of fields and
+//! Here: fixed texts, one line each in `texts!`, and the few which carry a value. Not here: names of fields and
 //! choices, findings, refusals. To add a text, add a line `name = "text";` to the group it belongs to.
 
 use super::labels::{label, lower_first};
@@ -289,15 +289,6 @@ pub const fn page_keys() -> &'static [(&'static str, &'static str)] {
     ]
 }
 
-/// `singular` for one, `plural` for any other number, after the number itself.
-fn counted(count: usize, singular: &str, plural: &str) -> String {
-    if count == 1 {
-        format!("1 {singular}")
-    } else {
-        format!("{count} {plural}")
-    }
-}
-
 /// How many findings there are of each grade: `1 stop, 3 queries, 1 note`.
 pub fn grade_counts(stops: usize, queries: usize, notes: usize) -> String {
     let parts: Vec<String> = [
@@ -427,4 +418,13 @@ pub fn edit_name(edit: &Edit, tag: impl Fn(HolderId) -> String) -> String {
 /// What the page says aloud after an edit has changed the findings.
 pub fn announced(counts: &str) -> String {
     format!("Worked out: {counts}")
+}
+
+/// `singular` for one, `plural` for any other number, after the number itself.
+fn counted(count: usize, singular: &str, plural: &str) -> String {
+    if count == 1 {
+        format!("1 {singular}")
+    } else {
+        format!("{count} {plural}")
+    }
 }

@@ -130,13 +130,13 @@ pub fn enclosure_sentence() -> Vec<Piece> {
         Value(Field::Cooling),
         Text(". The air inside is to stay at or below "),
         Value(Field::InsideLimit),
-        Text(". The wall coefficient is "),
+        Text(". Wall coefficient "),
         Value(Field::WallCoefficient),
-        Text("; the sun adds "),
+        Text("; heat of the sun "),
         Value(Field::SunHeat),
-        Text("; the fans move "),
+        Text("; airflow of the fans against their filters "),
         Value(Field::InstalledAirflow),
-        Text(" against their filters."),
+        Text("."),
     ]
 }
 
@@ -234,8 +234,7 @@ pub const fn gap(field: Field) -> &'static str {
         Field::MainRating => "the largest rating permitted",
         Field::MainLoss => "as much as the product standards allow",
         Field::WallCoefficient => "by the material",
-        Field::SunHeat => "no heat entered",
-        Field::InstalledAirflow => "an airflow not entered",
+        Field::SunHeat | Field::InstalledAirflow => "not entered",
         Field::Run(_, RunField::Size) => "the smallest size which fits",
         Field::Run(_, RunField::Length) => "a length not entered",
         Field::TransformerPower => "a power not entered",

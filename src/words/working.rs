@@ -122,7 +122,7 @@ pub fn working_line(figure: &Figure, system: UnitSystem) -> WorkingLine {
         terms: figure
             .terms
             .iter()
-            .map(|term| term_line(term, system))
+            .map(|term| term_line(term, &rule.form, system))
             .collect(),
     }
 }
@@ -137,7 +137,13 @@ pub fn source_name(source: &Source) -> String {
     let is_year =
         !source.edition.is_empty() && source.edition.bytes().all(|digit| digit.is_ascii_digit());
     if is_year {
-        format!("{} {}", source.name, source.edition)
+        // Standards of the IEC carry their year behind a colon.
+        let joint = if source.name.starts_with("IEC") {
+            ":"
+        } else {
+            " "
+        };
+        format!("{}{joint}{}", source.name, source.edition)
     } else {
         source.name.to_owned()
     }
@@ -177,7 +183,7 @@ fn note_on(figure: &Figure) -> String {
     }
 }
 
-fn term_line(term: &Term, system: UnitSystem) -> TermLine {
+fn term_line(term: &Term, form: &Form, system: UnitSystem) -> TermLine {
     let (ink, origin) = match &term.origin {
         Origin::Entered(field) => (
             Some(Ink::Entered),
@@ -191,7 +197,15 @@ fn term_line(term: &Term, system: UnitSystem) -> TermLine {
                 assumption_reason(*field)
             ),
         ),
-        Origin::Constant => (None, "given by the rule".to_owned()),
+        Origin::Constant => (
+            None,
+            match form {
+                Form::Formula { .. } | Form::Sum => "given by the rule",
+                Form::Lookup => "row or column of the table",
+                Form::Choice => "for comparison",
+            }
+            .to_owned(),
+        ),
         Origin::Figure(figure) => (Some(figure.ink), figure_origin(figure)),
     };
     TermLine {
