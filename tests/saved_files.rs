@@ -569,6 +569,9 @@ fn what_is_no_sheet_is_told_from_a_damaged_one() {
 
 #[test]
 fn a_huge_text_is_refused_before_it_is_parsed() {
+    let blanks = file::LARGEST_FILE - ORDINARY.len();
+    let largest = format!("{ORDINARY}{}", " ".repeat(blanks));
+    assert!(read(&largest).is_ok());
     let text = "x".repeat(file::LARGEST_FILE + 1);
     let refusal = Refusal::TooLarge {
         bytes: file::LARGEST_FILE + 1,

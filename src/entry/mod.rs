@@ -13,9 +13,7 @@ pub use choices::choice_spellings;
 pub use units::{unit_spellings, units_for};
 
 use crate::quantity::{Kind, Unit, WireSize};
-use crate::sheet::{
-    Choice, Entry, Impossible, LONGEST_TEXT, Measured, Record, Shape, UnitSystem, spec,
-};
+use crate::sheet::{Choice, Entry, LONGEST_TEXT, Measured, Record, Shape, UnitSystem, spec};
 use crate::working::Field;
 use numeral::{Numeral, Value};
 
@@ -145,16 +143,39 @@ pub fn read(field: Field, system: UnitSystem, text: &str) -> Result<Option<Entry
             check_length(text, longest)?;
             Entry::Text(text.to_owned())
         }
-        Shape::Measured { kind, .. } => {
-            Entry::Measured(measured(kind, spec(field).unit(system), text)?)
+        Shape::Measured { kind, least, most } => {
+            let measured = measured(kind, spec(field).unit(system), text)?;
+            let refusal = Refusal::OutOfRange {
+                text: text.to_owned(),
+                kind,
+                least,
+                most,
+                unit: measured.unit,
+            };
+            in_range(field, Entry::Measured(measured), refusal)?
         }
-        Shape::Count { least, most } => Entry::Count(count(text, least, most)?),
+        Shape::Count { least, most } => {
+            let out_of_range = Refusal::CountOutOfRange {
+                text: text.to_owned(),
+                least,
+                most,
+            };
+            let count = count(text, least, most)?.ok_or_else(|| out_of_range.clone())?;
+            in_range(field, Entry::Count(count), out_of_range)?
+        }
         Shape::Choice(offered) => Entry::Choice(choices::one(text, offered)?),
         Shape::Choices(offered) => Entry::Choices(choices::several(text, offered)?),
         Shape::Size => Entry::Size(sizes::size(text)?),
     };
-    check_range(field, &entry, text)?;
     Ok(Some(entry))
+}
+
+/// The entry, or `refusal` where the record does not take it: so there is one judge of ranges.
+fn in_range(field: Field, entry: Entry, refusal: Refusal) -> Result<Entry, Refusal> {
+    match Record::default().set(field, entry.clone()) {
+        Ok(()) => Ok(entry),
+        Err(_) => Err(refusal),
+    }
 }
 
 fn check_length(text: &str, most: usize) -> Result<(), Refusal> {
@@ -200,7 +221,8 @@ fn takes_fractions(kind: Kind) -> bool {
     matches!(kind, Kind::ShaftPower | Kind::Length)
 }
 
-fn count(text: &str, least: u32, most: u32) -> Result<u32, Refusal> {
+/// The whole number in `text`; `None` where it has more digits than any count.
+fn count(text: &str, least: u32, most: u32) -> Result<Option<u32>, Refusal> {
     let not_whole = || Refusal::NotWhole {
         text: text.to_owned(),
         least,
@@ -211,39 +233,5 @@ fn count(text: &str, least: u32, most: u32) -> Result<u32, Refusal> {
         return Err(not_whole());
     }
     let digits = numeral.whole_digits().ok_or_else(not_whole)?;
-    // Only too many digits can fail here.
-    digits.parse().map_err(|_| Refusal::CountOutOfRange {
-        text: text.to_owned(),
-        least,
-        most,
-    })
-}
-
-/// Asks the record itself, so that there is one judge of ranges.
-fn check_range(field: Field, entry: &Entry, text: &str) -> Result<(), Refusal> {
-    let Err(impossible) = Record::default().set(field, entry.clone()) else {
-        return Ok(());
-    };
-    let text = text.to_owned();
-    Err(match (spec(field).shape, entry, impossible) {
-        (Shape::Measured { kind, least, most }, Entry::Measured(measured), _) => {
-            Refusal::OutOfRange {
-                text,
-                kind,
-                least,
-                most,
-                unit: measured.unit,
-            }
-        }
-        (Shape::Count { least, most }, ..) => Refusal::CountOutOfRange { text, least, most },
-        (Shape::Choice(offered) | Shape::Choices(offered), ..) => {
-            Refusal::NotOffered { text, offered }
-        }
-        (_, _, Impossible::TooLong { most }) => Refusal::TooLong {
-            length: text.chars().count(),
-            most,
-        },
-        // The shapes left take whatever was read for them.
-        _ => Refusal::NotANumber { text },
-    })
+    Ok(digits.parse().ok())
 }
