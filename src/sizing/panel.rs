@@ -43,6 +43,8 @@ pub struct IncomingCircuit {
 /// One drive feeder as the incoming circuit sees it.
 #[derive(Debug, Clone, PartialEq)]
 pub struct FeederLoad {
+    /// Tag of the feeder.
+    pub tag: Arc<str>,
     /// Whether it runs together with the others.
     pub is_running: bool,
     /// The drive's rated input current.
@@ -54,6 +56,8 @@ pub struct FeederLoad {
 /// Another load, whose current counts once.
 #[derive(Debug, Clone, PartialEq)]
 pub struct OtherLoad {
+    /// Name of the load.
+    pub name: Arc<str>,
     /// Whether it runs together with the feeders.
     pub is_running: bool,
     /// Its current.
@@ -135,8 +139,12 @@ impl<'a> Loads<'a> {
         let terms: Vec<Term> = self
             .feeders
             .iter()
-            .map(|load| load.drive_input.term("I_in"))
-            .chain(self.others.iter().map(|load| load.current.term("I")))
+            .map(|load| load.drive_input.term("I_in").belonging_to(&load.tag))
+            .chain(
+                self.others
+                    .iter()
+                    .map(|load| load.current.term("I").belonging_to(&load.name)),
+            )
             .collect();
         (!terms.is_empty()).then(|| sum_of(rule, terms))
     }
@@ -153,13 +161,20 @@ impl<'a> Loads<'a> {
             .iter()
             .enumerate()
             .filter(|(position, _)| Some(*position) != largest)
-            .map(|(_, load)| load.drive_input.term("I_in"))
-            .chain(self.others.iter().map(|load| load.current.term("I")))
+            .map(|(_, load)| load.drive_input.term("I_in").belonging_to(&load.tag))
+            .chain(
+                self.others
+                    .iter()
+                    .map(|load| load.current.term("I").belonging_to(&load.name)),
+            )
             .collect();
         let rest_figure = sum_of(&rules::OTHER_INPUTS, others);
         let rest: Current = rest_figure.quantity()?;
         let (largest_value, largest_term) = match first {
-            Some(load) => (load.drive_input.value, load.drive_input.term("I_1")),
+            Some(load) => (
+                load.drive_input.value,
+                load.drive_input.term("I_1").belonging_to(&load.tag),
+            ),
             None => {
                 let none = Current::amperes(0.0);
                 (none, Term::constant("I_1", none))
@@ -205,15 +220,22 @@ fn main_device(
         .collect();
     let largest = position_of_largest_branch(&branches)?;
     let first = branches.get(largest)?;
-    let branch_figure =
-        Arc::new(rules::BRANCH_FOR_MAIN.figure(first.rating, [Term::of("I_n", &first.figure)]));
+    let branch_figure = Arc::new(rules::BRANCH_FOR_MAIN.figure(
+        first.rating,
+        [Term::of("I_n", &first.figure).belonging_to(first.tag)],
+    ));
     let sum_with = |current_of: fn(&Branch<'_>) -> Term| {
         let parts = branches
             .iter()
             .enumerate()
             .filter(|(position, _)| *position != largest)
             .map(|(_, branch)| current_of(branch))
-            .chain(running.others.iter().map(|load| load.current.term("I")))
+            .chain(
+                running
+                    .others
+                    .iter()
+                    .map(|load| load.current.term("I").belonging_to(&load.name)),
+            )
             .collect();
         let others = sum_of(&rules::OTHER_MOTORS, parts);
         let total = first.rating + others.quantity().unwrap_or(Current::amperes(0.0));
@@ -222,8 +244,8 @@ fn main_device(
             [Term::of("I_b", &branch_figure), Term::of("I_o", &others)],
         ))
     };
-    let sum = sum_with(|branch| branch.motor_current.term("I_m"));
-    let sum_by_inputs = sum_with(|branch| branch.drive_input.term("I_in"));
+    let sum = sum_with(|branch| branch.motor_current.term("I_m").belonging_to(branch.tag));
+    let sum_by_inputs = sum_with(|branch| branch.drive_input.term("I_in").belonging_to(branch.tag));
     let (largest, rating) = main_rating(input, &sum, carried, notes);
     Some(MainDevice {
         device: input.main.clone(),
@@ -236,6 +258,7 @@ fn main_device(
 
 /// A branch as the main device counts it.
 struct Branch<'a> {
+    tag: &'a Arc<str>,
     motor_current: &'a Given<Current>,
     drive_input: &'a Given<Current>,
     rating: Current,
@@ -247,6 +270,7 @@ impl<'a> Branch<'a> {
         let branch = load.branch.as_ref()?;
         let (rating, figure) = branch_for_main(input.main.value, branch, input.edition)?;
         Some(Self {
+            tag: &load.tag,
             motor_current: &branch.motor_current,
             drive_input: &load.drive_input,
             rating,

@@ -208,6 +208,10 @@ fn term_line(term: &Term, form: &Form, system: UnitSystem) -> TermLine {
         ),
         Origin::Figure(figure) => (Some(figure.ink), figure_origin(figure)),
     };
+    let origin = match &term.whose {
+        Some(whose) if !whose.is_empty() => format!("{whose}, {origin}"),
+        _ => origin,
+    };
     TermLine {
         symbol: symbol_shown(term.symbol),
         meaning: symbol_for(term.symbol, kind_of(term.amount)),
@@ -338,7 +342,15 @@ fn sum_numbers(figure: &Figure, result: &str, system: UnitSystem) -> String {
         }
         value => FormulaUnits::of(figure, system).shown(value),
     };
-    let parts: Vec<String> = figure.terms.iter().take(MOST_PARTS).map(part).collect();
+    let parts: Vec<String> = figure
+        .terms
+        .iter()
+        .take(MOST_PARTS)
+        .map(|term| match &term.whose {
+            Some(whose) if !whose.is_empty() => format!("{whose} {}", part(term)),
+            _ => part(term),
+        })
+        .collect();
     let left_out = figure.terms.len().saturating_sub(parts.len());
     match (parts.as_slice(), left_out) {
         ([], _) => format!("nothing to add: {result}"),

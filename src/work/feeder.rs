@@ -14,7 +14,8 @@ use crate::sizing::panel::FeederLoad;
 use crate::sizing::reactor::{Reactor, ReactorInput, reactor_of};
 use crate::sizing::rules;
 use crate::working::{
-    Amount, Field, Figure, Given, Grade, Holder, MarginNote, NoteKind, Run, RunField, Term,
+    Amount, Field, Figure, Given, Grade, Holder, HolderId, MarginNote, NoteKind, Run, RunField,
+    Term,
 };
 use std::sync::Arc;
 
@@ -36,7 +37,7 @@ pub(super) fn work_feeder(item: &Item, site: &Site, air_band: Option<Temperature
     let mut notes = Vec::new();
     let parts = parts_of(&inputs, site, &mut notes);
     let holder = Holder::Feeder(item.id);
-    let load = load_of(&inputs, &parts);
+    let load = load_of(item.id, &inputs, &parts);
     let mut notes: Vec<MarginNote> = notes.into_iter().map(|note| note.held_by(holder)).collect();
     notes.sort_by_key(|note| note.grade);
     let worked = WorkedFeeder {
@@ -332,13 +333,23 @@ fn heat_of(
     }
 }
 
-fn load_of(inputs: &FeederInputs, parts: &Parts) -> Option<FeederLoad> {
+/// A feeder's tag, or its number in the sheet where it has none.
+pub(super) fn shown_tag(tag: &str, id: HolderId) -> Arc<str> {
+    if tag.is_empty() {
+        format!("#{}", id.0).into()
+    } else {
+        tag.into()
+    }
+}
+
+fn load_of(id: HolderId, inputs: &FeederInputs, parts: &Parts) -> Option<FeederLoad> {
     let drive_input = parts.drive_input.as_ref()?;
     let branch = parts
         .motor_current
         .as_ref()
         .map(|motor_current| device_input(inputs, motor_current, Some(drive_input)));
     Some(FeederLoad {
+        tag: shown_tag(&inputs.tag, id),
         is_running: inputs.is_running,
         drive_input: drive_input.clone(),
         branch,

@@ -1,6 +1,6 @@
 //! The heat ledger: every source of heat inside, by group, running together and connected.
 
-use super::feeder::Feeder;
+use super::feeder::{Feeder, shown_tag};
 use super::{Ledger, LedgerGroup, LedgerRow, WorkedSource};
 use crate::quantity::Power;
 use crate::sizing::heat::sum_of_heats;
@@ -28,7 +28,11 @@ pub(super) fn ledger_of(
             Some(Entry {
                 group: LedgerGroup::Others,
                 is_running: source.is_running,
-                term: source.heat.as_ref()?.term("P"),
+                term: source
+                    .heat
+                    .as_ref()?
+                    .term("P")
+                    .belonging_to(&source.name.as_str().into()),
             })
         }))
         .chain(always(LedgerGroup::Devices, main))
@@ -68,6 +72,7 @@ const GROUPS: [LedgerGroup; 6] = [
 fn feeder_entries(feeder: &Feeder) -> impl Iterator<Item = Entry> {
     let heat = &feeder.worked.heat;
     let is_running = feeder.worked.is_running;
+    let tag = shown_tag(&feeder.worked.tag, feeder.worked.id);
     [
         (
             LedgerGroup::Drives,
@@ -93,7 +98,7 @@ fn feeder_entries(feeder: &Feeder) -> impl Iterator<Item = Entry> {
         Some(Entry {
             group,
             is_running,
-            term: term?,
+            term: term?.belonging_to(&tag),
         })
     })
 }

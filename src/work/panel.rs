@@ -1,6 +1,6 @@
 //! The panel: incoming circuit, fault current, and the lowest short-circuit rating inside.
 
-use super::feeder::Feeder;
+use super::feeder::{Feeder, shown_tag};
 use super::{WorkedFeeder, WorkedSource};
 use crate::assume::SheetInputs;
 use crate::quantity::{Current, Power};
@@ -39,6 +39,7 @@ pub(super) fn incoming_of(
         .iter()
         .filter_map(|source| {
             Some(OtherLoad {
+                name: source.name.as_str().into(),
                 is_running: source.is_running,
                 current: source.current.clone()?,
             })
@@ -225,11 +226,7 @@ fn lowest_of(inputs: &SheetInputs, feeders: &[Feeder]) -> Option<(Current, Vec<H
     Some((lowest, holders))
 }
 
-/// A feeder's tag, or its number in the sheet where it has none.
+/// A feeder's tag as findings name it.
 pub(super) fn tag_of(feeder: &WorkedFeeder) -> String {
-    if feeder.tag.is_empty() {
-        format!("#{}", feeder.id.0)
-    } else {
-        feeder.tag.clone()
-    }
+    shown_tag(&feeder.tag, feeder.id).to_string()
 }

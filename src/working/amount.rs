@@ -74,6 +74,8 @@ pub struct Term {
     pub amount: Amount,
     /// Where it came from.
     pub origin: Origin,
+    /// The tag or name of the feeder or source which it belongs to, where a rule takes terms of several.
+    pub whose: Option<Arc<str>>,
 }
 
 impl Term {
@@ -83,6 +85,15 @@ impl Term {
             symbol,
             amount: amount.into(),
             origin: Origin::Constant,
+            whose: None,
+        }
+    }
+
+    /// The same term, told apart from those of other feeders.
+    pub fn belonging_to(self, whose: &Arc<str>) -> Self {
+        Self {
+            whose: Some(Arc::clone(whose)),
+            ..self
         }
     }
 
@@ -92,6 +103,7 @@ impl Term {
             symbol,
             amount: figure.value,
             origin: Origin::Figure(Arc::clone(figure)),
+            whose: None,
         }
     }
 }
@@ -189,6 +201,7 @@ impl<T: Copy + Into<Amount>> Given<T> {
             symbol,
             amount: self.value.into(),
             origin: self.origin.clone(),
+            whose: None,
         }
     }
 }
