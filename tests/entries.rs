@@ -148,6 +148,16 @@ fn a_number_is_read_with_its_unit_or_in_the_unit_of_the_field() {
 }
 
 #[test]
+fn nought_has_no_sign() {
+    for text in ["-0", "\u{2212}0.0 W", "-1e-999"] {
+        let Ok(Some(Entry::Measured(measured))) = read(SunHeat, Us, text) else {
+            panic!("{text} is not taken");
+        };
+        assert_eq!(measured.number.to_bits(), 0.0_f64.to_bits(), "for {text:?}");
+    }
+}
+
+#[test]
 fn a_mark_which_may_part_thousands_is_refused_with_both_readings() {
     let rows = [
         (Altitude, "3,900", [3900.0, 3.9], Foot),
@@ -238,6 +248,8 @@ fn a_unit_is_refused_with_those_that_fit() {
             voltages.clone(),
         ),
         (SupplyVoltage, "480 e", Err("e"), voltages.clone()),
+        (SupplyVoltage, "480e", Err("e"), voltages.clone()),
+        (SupplyVoltage, "480e-", Err("e-"), voltages.clone()),
         (SupplyVoltage, "480/277", Err("/277"), voltages.clone()),
         (SupplyVoltage, "480 A", Ok("A"), voltages.clone()),
         (SupplyVoltage, "48 %", Ok("%"), voltages),
@@ -245,6 +257,8 @@ fn a_unit_is_refused_with_those_that_fit() {
         (MotorPower, "15 kVA", Ok("kVA"), powers.clone()),
         (MotorPower, "1/0 hp", Err("/0 hp"), powers.clone()),
         (MotorPower, "3/2 hp", Err("/2 hp"), powers.clone()),
+        (MotorPower, "1/1 hp", Err("/1 hp"), powers.clone()),
+        (MotorPower, "1/100000", Err("/100000"), powers.clone()),
         (DriveLoss, "400 F", Ok("F"), powers.clone()),
         (DriveLoss, "1/2 kW", Err("/2 kW"), powers),
         (
@@ -389,6 +403,8 @@ fn a_size_which_is_not_made_is_refused_with_its_neighbours() {
         ("2500", Some(Kcmil2000), None),
         ("2 kcmil", Some(Awg18), Some(Awg16)),
         ("250 AWG", None, Some(Awg18)),
+        ("#250", None, Some(Awg18)),
+        ("1/2 mm2", None, None),
         ("", None, None),
         ("two", None, None),
         ("2 m", None, None),

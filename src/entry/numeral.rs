@@ -146,9 +146,6 @@ pub(super) fn fraction(text: &str) -> Option<(f64, &str)> {
 fn digits(text: &str) -> Option<(f64, &str)> {
     let end = text.bytes().take_while(u8::is_ascii_digit).count();
     let (digits, rest) = text.split_at_checked(end)?;
-    if end > 4 {
-        return None;
-    }
     Some((f64::from(digits.parse::<u16>().ok()?), rest))
 }
 
