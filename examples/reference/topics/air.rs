@@ -1,0 +1,262 @@
+//! Air: pressure and density of a site, and the flow which carries heat.
+
+use super::heat::drive_heat;
+use super::{Answers, Gathered, Inputs, Topic, Work, given};
+use crate::reference::keys::{Key, Takes, needed, optional};
+use std::sync::Arc;
+use ventrail::physics::air::{
+    SPECIFIC_HEAT, air_mass_flow_kg_s, airflow, airflow_by_metric_rule, airflow_by_us_rule,
+    airflow_constant, dry_air_density, site_pressure,
+};
+use ventrail::quantity::{
+    AirFlow, Density, Kind, Length, Power, Pressure, Quantity, SpecificHeat, Temperature,
+    TemperatureDifference,
+};
+use ventrail::sizing::air::{AirInput, air_of};
+use ventrail::sizing::rules;
+
+const HEAT: Key = needed(
+    "heat",
+    Takes::Measured(Kind::Power),
+    "heat which the air carries",
+);
+const ALTITUDE: Key = needed(
+    "altitude",
+    Takes::Measured(Kind::Length),
+    "of the site above the sea",
+);
+const RISE: Key = needed(
+    "rise",
+    Takes::Measured(Kind::TemperatureDifference),
+    "of the air between inlet and outlet",
+);
+const SPECIFIC: Key = optional(
+    "specific_heat",
+    Takes::Measured(Kind::SpecificHeat),
+    "of air, else that of the sheet",
+);
+
+/// Air.
+pub const TOPICS: &[Topic] = &[
+    Topic {
+        name: "air density",
+        about: "Pressure of a site and density of dry air there: physics::air::site_pressure and dry_air_density.",
+        inputs: &[
+            ALTITUDE,
+            needed(
+                "temperature",
+                Takes::Measured(Kind::Temperature),
+                "of the air",
+            ),
+        ],
+        expected: &[
+            needed("pressure", Takes::Measured(Kind::Pressure), "of the site"),
+            needed("density", Takes::Measured(Kind::Density), "of the air"),
+        ],
+        work: Work::Now(|inputs| {
+            let pressure = site_pressure(inputs.measured("altitude")?);
+            let density = dry_air_density(pressure, inputs.measured("temperature")?);
+            Gathered::default()
+                .quantity("pressure", Some(pressure))
+                .quantity("density", Some(density))
+                .done()
+        }),
+    },
+    Topic {
+        name: "airflow",
+        about: "Air to be moved through an enclosure, no credit for the walls: sizing::air::air_of; mass and outlet volume by physics::air.",
+        inputs: &[
+            HEAT,
+            needed(
+                "inlet",
+                Takes::Measured(Kind::Temperature),
+                "air around the enclosure",
+            ),
+            needed("outlet", Takes::Measured(Kind::Temperature), "air inside"),
+            ALTITUDE,
+        ],
+        expected: &[
+            needed("mass_flow_kg_s", Takes::Number, "mass of air for a second"),
+            needed(
+                "at_inlet",
+                Takes::Measured(Kind::AirFlow),
+                "volume with the density of the inlet",
+            ),
+            needed(
+                "at_outlet",
+                Takes::Measured(Kind::AirFlow),
+                "volume with the density of the outlet",
+            ),
+            needed(
+                "metric_rule",
+                Takes::Measured(Kind::AirFlow),
+                "by the metric trade rule",
+            ),
+            needed(
+                "us_rule",
+                Takes::Measured(Kind::AirFlow),
+                "by the US trade rule",
+            ),
+        ],
+        work: Work::Now(work_airflow),
+    },
+    Topic {
+        name: "airflow at a density",
+        about: "Air to be moved where it has a known density: physics::air::airflow.",
+        inputs: &[
+            HEAT,
+            RISE,
+            needed("density", Takes::Measured(Kind::Density), "of the air"),
+        ],
+        expected: &[needed(
+            "flow",
+            Takes::Measured(Kind::AirFlow),
+            "volume with that density",
+        )],
+        work: Work::Now(|inputs| {
+            let flow = airflow(
+                inputs.measured("heat")?,
+                inputs.measured("density")?,
+                inputs.measured("rise")?,
+            );
+            Gathered::default().quantity("flow", Some(flow)).done()
+        }),
+    },
+    Topic {
+        name: "airflow by trade rule",
+        about: "Air to be moved by the two trade rules: physics::air::airflow_by_metric_rule and airflow_by_us_rule.",
+        inputs: &[
+            optional(
+                "heat",
+                Takes::Measured(Kind::Power),
+                "heat which the air carries, else that of a drive",
+            ),
+            optional(
+                "power",
+                Takes::Measured(Kind::ShaftPower),
+                "rated power of the drive's motor",
+            ),
+            optional(
+                "share",
+                Takes::Measured(Kind::Ratio),
+                "of that power which is heat",
+            ),
+            RISE,
+        ],
+        expected: &[
+            needed(
+                "metric_rule",
+                Takes::Measured(Kind::AirFlow),
+                "V = 3.1 P / dT in cubic metres an hour and kelvin",
+            ),
+            needed(
+                "us_rule",
+                Takes::Measured(Kind::AirFlow),
+                "V = 3.16 P / dT in cubic feet a minute and degrees Fahrenheit",
+            ),
+        ],
+        work: Work::Now(work_trade_rules),
+    },
+    Topic {
+        name: "air mass flow",
+        about: "Mass of air which carries a heat: physics::air::air_mass_flow_kg_s.",
+        inputs: &[HEAT, RISE, SPECIFIC],
+        expected: &[needed(
+            "mass_flow_kg_s",
+            Takes::Number,
+            "mass of air for a second",
+        )],
+        work: Work::Now(|inputs| {
+            let specific = inputs.measured_or("specific_heat", SPECIFIC_HEAT);
+            let mass =
+                air_mass_flow_kg_s(inputs.measured("heat")?, specific, inputs.measured("rise")?);
+            Gathered::default().number("mass_flow_kg_s", mass).done()
+        }),
+    },
+    Topic {
+        name: "airflow constant",
+        about: "The constant C of V = C P / dT for air of a temperature and pressure: physics::air::airflow_constant.",
+        inputs: &[
+            needed(
+                "temperature",
+                Takes::Measured(Kind::Temperature),
+                "of the air",
+            ),
+            needed("pressure", Takes::Measured(Kind::Pressure), "of the air"),
+            SPECIFIC,
+        ],
+        expected: &[
+            needed(
+                "constant_m3_per_h_k_per_w",
+                Takes::Number,
+                "C for cubic metres an hour, kelvin and watts",
+            ),
+            needed(
+                "constant_cfm_degf_per_w",
+                Takes::Number,
+                "C for cubic feet a minute, degrees Fahrenheit and watts",
+            ),
+        ],
+        work: Work::Now(work_constant),
+    },
+];
+
+fn work_airflow(inputs: &Inputs) -> Result<Answers, String> {
+    let heat: Power = inputs.measured("heat")?;
+    let (inlet, outlet): (Temperature, Temperature) =
+        (inputs.measured("inlet")?, inputs.measured("outlet")?);
+    let altitude: Length = inputs.measured("altitude")?;
+    let air = air_of(&AirInput {
+        walls: None,
+        heat: Arc::new(rules::LEDGER_SUM.figure(heat, Vec::new())),
+        ambient: given(inlet),
+        limit: given(outlet),
+        altitude: given(altitude),
+        is_ventilated: true,
+    });
+    let rise = outlet - inlet;
+    let pressure: Option<Pressure> = air.pressure.as_ref().and_then(|figure| figure.quantity());
+    let at_outlet = pressure.map(|pressure| airflow(heat, dry_air_density(pressure, outlet), rise));
+    Gathered::default()
+        .number(
+            "mass_flow_kg_s",
+            air_mass_flow_kg_s(heat, SPECIFIC_HEAT, rise),
+        )
+        .figure("at_inlet", air.airflow.as_ref())
+        .quantity("at_outlet", at_outlet)
+        .figure("metric_rule", air.airflow_metric_rule.as_ref())
+        .figure("us_rule", air.airflow_us_rule.as_ref())
+        .done()
+}
+
+fn work_trade_rules(inputs: &Inputs) -> Result<Answers, String> {
+    let heat = match inputs.maybe("heat") {
+        Some(heat) => heat,
+        None => drive_heat(inputs)?,
+    };
+    let rise: TemperatureDifference = inputs.measured("rise")?;
+    Gathered::default()
+        .quantity("metric_rule", Some(airflow_by_metric_rule(heat, rise)))
+        .quantity("us_rule", Some(airflow_by_us_rule(heat, rise)))
+        .done()
+}
+
+fn work_constant(inputs: &Inputs) -> Result<Answers, String> {
+    let density: Density = dry_air_density(
+        inputs.measured("pressure")?,
+        inputs.measured("temperature")?,
+    );
+    let specific: SpecificHeat = inputs.measured_or("specific_heat", SPECIFIC_HEAT);
+    let constant = AirFlow::from_si(airflow_constant(density, specific));
+    let one_kelvin = TemperatureDifference::kelvin(1.0);
+    Gathered::default()
+        .number(
+            "constant_m3_per_h_k_per_w",
+            constant.to_cubic_metres_per_hour(),
+        )
+        .number(
+            "constant_cfm_degf_per_w",
+            constant.to_cubic_feet_per_minute() * one_kelvin.to_fahrenheit_degrees(),
+        )
+        .done()
+}
