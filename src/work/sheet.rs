@@ -175,6 +175,14 @@ struct Settled {
     notes: Vec<MarginNote>,
 }
 
+impl Settled {
+    /// Temperature of the air inside, where it is known.
+    fn inside(&self) -> Option<Temperature> {
+        let inside = self.enclosure.air.inside.as_ref()?;
+        Some(inside.value)
+    }
+}
+
 /// Solves the loop between the air inside and the sizes inside.
 ///
 /// Sizes, and so the heat, are the same for the whole of a band of air temperature, and hotter air never gives smaller
@@ -190,13 +198,7 @@ fn settle(
     let mut cooler_edge = None;
     for edge in band_edges() {
         let mut settled = work_for(sheet, inputs, sources, Some(edge), memory);
-        let Some(inside) = settled
-            .enclosure
-            .air
-            .inside
-            .as_ref()
-            .map(|inside| inside.value)
-        else {
+        let Some(inside) = settled.inside() else {
             return work_for(sheet, inputs, sources, None, memory);
         };
         if reaches(edge.to_kelvin(), inside.to_kelvin()) {
@@ -211,15 +213,16 @@ fn settle(
         }
         cooler_edge = Some(edge);
     }
-    // Hotter than the last band: the hottest band's sizes would not hold, so the air itself is handed on.
+    // Hotter than the last band, where no insulation may be used: worked for that air itself. Without the heat of wires
+    // the air may come out below the edge after all; then the edge is the warmer end.
     let hottest = work_for(sheet, inputs, sources, band_edges().last(), memory);
-    let inside = hottest
-        .enclosure
-        .air
-        .inside
-        .as_ref()
-        .map(|inside| inside.value);
-    work_for(sheet, inputs, sources, inside, memory)
+    let mut beyond = work_for(sheet, inputs, sources, hottest.inside(), memory);
+    if let (Some(edge), Some(inside)) = (cooler_edge, beyond.inside())
+        && inside < edge
+    {
+        keep_warmer_end(&mut beyond, edge);
+    }
+    beyond
 }
 
 fn keep_warmer_end(settled: &mut Settled, edge: Temperature) {
