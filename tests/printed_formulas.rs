@@ -470,7 +470,7 @@ fn demanded(rule: &'static Rule, symbol: &'static str, amperes: f64) -> f64 {
 /// A run in the field, warm and shared so that both columns are worked, with an installed size above the smallest which
 /// fits, so that its grounding conductor grows.
 fn sized_run(draw: &mut Draw) -> Conductors {
-    let current = draw.given(Field::DriveInput, 1.0, 200.0);
+    let current = draw.given(Field::DriveInput, 1.0, 120.0);
     let demand: Demand = demand_of(&rules::INPUT_AMPACITY, "I_in", &current);
     let voltage = draw.given(Field::SupplyVoltage, 200.0, 600.0);
     let input = RunInput {

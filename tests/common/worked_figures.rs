@@ -27,6 +27,13 @@ pub fn every_figure(worked: &Worked) -> Vec<Arc<Figure>> {
     with_all_below(figures_of(worked))
 }
 
+/// Every figure of one feeder and every figure below one, each once.
+pub fn figures_of_feeder(feeder: &WorkedFeeder) -> Vec<Arc<Figure>> {
+    let mut found = Found::default();
+    found.feeder(feeder);
+    with_all_below(found.0)
+}
+
 /// The figures and all below them, each once.
 pub fn with_all_below(figures: Vec<Arc<Figure>>) -> Vec<Arc<Figure>> {
     let mut seen = HashSet::new();
