@@ -222,6 +222,7 @@ fn loads_of(inputs: &Inputs, main: DeviceType) -> Result<Vec<FeederLoad>, String
         .into_iter()
         .enumerate()
         .map(|(position, drive_input)| FeederLoad {
+            tag: format!("{}", position + 1).into(),
             is_running: true,
             branch: motors.get(position).map(|motor| DeviceInput {
                 drive_input: Some(drive_input.clone()),
@@ -239,6 +240,7 @@ fn work_incoming(inputs: &Inputs) -> Result<Answers, String> {
         .several::<Current>("others")
         .into_iter()
         .map(|current| OtherLoad {
+            name: "other".into(),
             is_running: true,
             current: given(current),
         });
