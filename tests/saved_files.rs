@@ -581,6 +581,12 @@ fn a_huge_text_is_refused_before_it_is_parsed() {
 }
 
 #[test]
+fn the_largest_next_identity_is_taken() {
+    let largest = format!("\"next_id\": {}", file::LARGEST_NEXT_ID);
+    assert!(read(&replaced("\"next_id\": 9", &largest)).is_ok());
+}
+
+#[test]
 fn a_text_of_very_many_values_is_refused() {
     let text = format!("[{}0]", "0,".repeat(file::MOST_VALUES));
     let refusal = Refusal::TooManyValues {
