@@ -47,17 +47,19 @@ pub(super) fn ampacities(
     needed: Current,
     size: WireSize,
 ) -> Result<Ampacities, SizeFailure> {
-    let column = terminal_column(input.terminal.value, needed);
-    let (cell, rule) = match input.surrounding {
+    let by_terminals = terminal_column(input.terminal.value, needed);
+    let (column, cell, rule) = match input.surrounding {
         // Inside, wire of a cooler insulation than the terminals is read by its insulation.
-        Surrounding::Inside { .. } => (
-            inside_row(size).and_then(|row| row.ampacity(column.min(input.insulation.value))),
-            &rules::INSIDE_CELL,
-        ),
-        Surrounding::Field { .. } => (
-            ampacity_row(size).and_then(|row| row.ampacity(input.metal.value, column)),
-            &rules::FIELD_TERMINAL_CELL,
-        ),
+        Surrounding::Inside { .. } => {
+            let column = by_terminals.min(input.insulation.value);
+            let cell = inside_row(size).and_then(|row| row.ampacity(column));
+            (column, cell, &rules::INSIDE_CELL)
+        }
+        Surrounding::Field { .. } => {
+            let row = ampacity_row(size);
+            let cell = row.and_then(|row| row.ampacity(input.metal.value, by_terminals));
+            (by_terminals, cell, &rules::FIELD_TERMINAL_CELL)
+        }
     };
     let cell = cell.ok_or(SizeFailure::NoCell)?;
     let cell_figure = Arc::new(rule.figure(
