@@ -37,6 +37,14 @@ fn amount_of(figure: Option<&Arc<Figure>>) -> Option<Amount> {
     figure.map(|figure| figure.value)
 }
 
+/// The working of a value which has one.
+fn figure_of(origin: &Origin) -> Option<Arc<Figure>> {
+    match origin {
+        Origin::Figure(figure) => Some(Arc::clone(figure)),
+        Origin::Entered(_) | Origin::Assumed(_) | Origin::Constant => None,
+    }
+}
+
 fn heat_total(found: &Findings<'_>) -> Total {
     Total {
         kind: TotalKind::Heat,
@@ -66,9 +74,9 @@ fn inside_total(found: &Findings<'_>) -> Total {
         figure: found
             .enclosure
             .air
-            .sealed_inside
-            .clone()
-            .filter(|_| !found.enclosure.is_ventilated),
+            .inside
+            .as_ref()
+            .and_then(|inside| figure_of(&inside.origin)),
         limit: Some(limit.into()),
         verdict,
     }
@@ -178,10 +186,7 @@ fn fault_total(found: &Findings<'_>) -> Total {
         kind: TotalKind::FaultCurrent,
         running: fault.map(|fault| fault.value.into()),
         connected: None,
-        figure: fault.and_then(|fault| match &fault.origin {
-            Origin::Figure(figure) => Some(Arc::clone(figure)),
-            _ => None,
-        }),
+        figure: fault.and_then(|fault| figure_of(&fault.origin)),
         limit: lowest.map(Amount::from),
         verdict,
     }
