@@ -65,7 +65,7 @@ fn cases(cases: u32) -> ProptestConfig {
 // --- every sheet ----------------------------------------------------------------------------------------------------
 
 proptest! {
-    #![proptest_config(cases(250))]
+    #![proptest_config(cases(120))]
 
     #[test]
     fn any_sheet_works_out_to_finite_numbers_alone(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
@@ -143,7 +143,7 @@ fn a_number_which_is_none_is_seen_where_it_stands() {
 }
 
 proptest! {
-    #![proptest_config(cases(60))]
+    #![proptest_config(cases(40))]
 
     /// Each edit on the result of the one before, so that what is taken over has been taken over before.
     #[test]
@@ -293,7 +293,7 @@ fn resolved(edit: &AnyEdit, sheet: &Sheet) -> Edit {
 // --- what was entered and what was assumed --------------------------------------------------------------------------
 
 proptest! {
-    #![proptest_config(cases(120))]
+    #![proptest_config(cases(70))]
 
     #[test]
     fn nothing_which_was_entered_is_reported_as_assumed(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
@@ -386,7 +386,7 @@ fn is_amount(entry: &Entry, amount: Amount) -> bool {
 // --- findings and totals --------------------------------------------------------------------------------------------
 
 proptest! {
-    #![proptest_config(cases(150))]
+    #![proptest_config(cases(70))]
 
     #[test]
     fn every_finding_is_at_a_holder_which_exists_and_stops_come_first(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
@@ -421,6 +421,21 @@ proptest! {
         let main_unrated = entry_at(&sheet, Place { holder: Holder::Sheet, field: Field::MainShortCircuitRating }).is_none();
         if unrated || main_unrated {
             prop_assert_ne!(fault.verdict, Verdict::Within, "a rating is missing");
+        }
+    }
+
+    /// What is unfolded at a total is the working of its value; at the main device, of its limit.
+    #[test]
+    fn the_working_beside_a_total_is_its_own(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed(), sealed_sheet().boxed()]) {
+        let worked = work_out(&sheet);
+        for total in &worked.totals {
+            let wanted = match total.kind {
+                TotalKind::MainDevice => total.limit,
+                _ => total.running,
+            };
+            if let Some(figure) = &total.figure {
+                prop_assert_eq!(Some(figure.value), wanted, "{:?}", total);
+            }
         }
     }
 
@@ -503,7 +518,7 @@ fn is_close(a: f64, b: f64) -> bool {
 // --- heat and the air inside ----------------------------------------------------------------------------------------
 
 proptest! {
-    #![proptest_config(cases(150))]
+    #![proptest_config(cases(70))]
 
     #[test]
     fn the_heat_in_all_is_the_sum_of_its_rows_and_of_its_sources(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
@@ -540,7 +555,7 @@ proptest! {
 #[test]
 fn a_sealed_enclosure_settles_where_air_and_sizes_agree() {
     let seen = std::cell::RefCell::new(BTreeSet::new());
-    let verdict = TestRunner::new(cases(250)).run(&sealed_sheet(), |sheet| {
+    let verdict = TestRunner::new(cases(120)).run(&sealed_sheet(), |sheet| {
         let settled = settles(&sheet)?;
         seen.borrow_mut().insert(settled);
         Ok(())
@@ -623,7 +638,7 @@ fn settles(sheet: &Sheet) -> Result<Settled, TestCaseError> {
 }
 
 proptest! {
-    #![proptest_config(cases(150))]
+    #![proptest_config(cases(70))]
 
     /// More heat, and hotter air around, never leave it cooler inside.
     #[test]
@@ -1152,7 +1167,7 @@ proptest! {
 }
 
 proptest! {
-    #![proptest_config(cases(100))]
+    #![proptest_config(cases(60))]
 
     /// The same in a sheet, where a rating which was entered against the limit has its stop.
     #[test]
