@@ -177,14 +177,18 @@ fn bind(wasm: &Path) -> Result<Program, Complaint> {
     binding.no_modules(true).map_err(complain)?;
     let mut output = binding.generate_output().map_err(complain)?;
     // A crate that carries scripts of its own needs modules, which cannot be loaded from a disk.
-    let carries_scripts = output
+    let scripts: Vec<&str> = output
         .snippets()
-        .values()
-        .any(|scripts| !scripts.is_empty());
-    if carries_scripts || !output.local_modules().is_empty() {
-        return Err(Complaint::Glue(
-            "a crate carries scripts of its own, which one file cannot hold".to_owned(),
-        ));
+        .iter()
+        .filter(|(_, scripts)| !scripts.is_empty())
+        .map(|(name, _)| name.as_str())
+        .chain(output.local_modules().keys().map(String::as_str))
+        .collect();
+    if !scripts.is_empty() {
+        return Err(Complaint::Glue(format!(
+            "these carry scripts of their own, which one file cannot hold: {}",
+            scripts.join(", ")
+        )));
     }
     Ok(Program {
         glue: output.js().to_owned(),
