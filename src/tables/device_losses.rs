@@ -16,12 +16,15 @@ pub struct LossLimit {
 
 /// The loss limit of one pole of a breaker of `rating`; `None` above 125 A.
 pub fn breaker_pole(rating: Current) -> Option<LossLimit> {
-    BREAKER_POLES.into_iter().find(|row| rating <= row.up_to)
+    BREAKER_POLES
+        .iter()
+        .find(|row| rating <= row.up_to)
+        .copied()
 }
 
 /// The loss limit of one fuse link of `rating`; `None` above 1250 A.
 pub fn fuse_link(rating: Current) -> Option<LossLimit> {
-    FUSE_LINKS.into_iter().find(|row| rating <= row.up_to)
+    FUSE_LINKS.iter().find(|row| rating <= row.up_to).copied()
 }
 
 const fn limit(amperes: f64, watts: f64) -> LossLimit {
@@ -33,7 +36,7 @@ const fn limit(amperes: f64, watts: f64) -> LossLimit {
 
 /// IEC 60898-1, largest loss for each pole: up to amperes, watts.
 #[rustfmt::skip]
-pub const BREAKER_POLES: [LossLimit; 9] = [
+pub static BREAKER_POLES: [LossLimit; 9] = [
     limit(10.0, 3.0),
     limit(16.0, 3.5),
     limit(25.0, 4.5),
@@ -48,7 +51,7 @@ pub const BREAKER_POLES: [LossLimit; 9] = [
 /// IEC 60269-2, largest loss of a gG link by NH size: the largest rating made in the size, watts. Sizes 000, 00, 1, 2,
 /// 3, 4, 4a; size 0 is left out because size 00 covers its ratings with less.
 #[rustfmt::skip]
-pub const FUSE_LINKS: [LossLimit; 7] = [
+pub static FUSE_LINKS: [LossLimit; 7] = [
     limit(100.0, 7.5),
     limit(160.0, 12.0),
     limit(250.0, 23.0),

@@ -45,7 +45,10 @@ impl FaultConstantRow {
 
 /// The row for `size`; there is none for 700, 800 and 900 kcmil nor above 1000.
 pub fn fault_constant_row(size: WireSize) -> Option<FaultConstantRow> {
-    FAULT_CONSTANT_ROWS.into_iter().find(|row| row.size == size)
+    FAULT_CONSTANT_ROWS
+        .iter()
+        .find(|row| row.size == size)
+        .copied()
 }
 
 const fn row(
@@ -65,7 +68,7 @@ const fn row(
 
 /// Size; copper in steel and in nonmagnetic conduit; aluminium in steel; aluminium in nonmagnetic conduit.
 #[rustfmt::skip]
-pub const FAULT_CONSTANT_ROWS: [FaultConstantRow; 21] = [
+pub static FAULT_CONSTANT_ROWS: [FaultConstantRow; 21] = [
     row(WireSize::Awg14, [389.0, 389.0], 237.0, Some(237.0)),
     row(WireSize::Awg12, [617.0, 617.0], 376.0, Some(376.0)),
     row(WireSize::Awg10, [981.0, 982.0], 599.0, Some(599.0)),

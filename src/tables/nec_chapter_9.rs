@@ -28,7 +28,7 @@ impl ConductorRow {
 
 /// The row of Table 8 for `size`; sizes above 1000 kcmil have none here.
 pub fn conductor_row(size: WireSize) -> Option<ConductorRow> {
-    CONDUCTOR_ROWS.into_iter().find(|row| row.size == size)
+    CONDUCTOR_ROWS.iter().find(|row| row.size == size).copied()
 }
 
 /// The area of `size`: exact for sizes in circular mils, by Table 8 for gauge sizes.
@@ -98,7 +98,7 @@ impl ImpedanceRow {
 
 /// The row of Table 9 for `size`; it has none for 700, 800 and 900 kcmil nor above 1000.
 pub fn impedance_row(size: WireSize) -> Option<ImpedanceRow> {
-    IMPEDANCE_ROWS.into_iter().find(|row| row.size == size)
+    IMPEDANCE_ROWS.iter().find(|row| row.size == size).copied()
 }
 
 const fn row(size: WireSize, circular_mils: f64, copper: f64, aluminium: f64) -> ConductorRow {
@@ -113,7 +113,7 @@ const fn row(size: WireSize, circular_mils: f64, copper: f64, aluminium: f64) ->
 /// Table 8: size, circular mils, ohms for 1000 ft at 75 °C of uncoated copper and of aluminium, stranded.
 #[rustfmt::skip]
 #[allow(clippy::approx_constant, reason = "the table prints 3.14 ohms for 14 AWG, which has nothing to do with circles")]
-pub const CONDUCTOR_ROWS: [ConductorRow; 26] = [
+pub static CONDUCTOR_ROWS: [ConductorRow; 26] = [
     row(WireSize::Awg18, 1620.0, 7.95, 13.1),
     row(WireSize::Awg16, 2580.0, 4.99, 8.21),
     row(WireSize::Awg14, 4110.0, 3.14, 5.17),
@@ -158,7 +158,7 @@ const fn impedance(
 
 /// Table 9: size; reactance in PVC or aluminium, in steel; resistance of copper and of aluminium in PVC, aluminium, steel.
 #[rustfmt::skip]
-pub const IMPEDANCE_ROWS: [ImpedanceRow; 21] = [
+pub static IMPEDANCE_ROWS: [ImpedanceRow; 21] = [
     impedance(WireSize::Awg14, [0.058, 0.073], [3.1, 3.1, 3.1], None),
     impedance(WireSize::Awg12, [0.054, 0.068], [2.0, 2.0, 2.0], Some([3.2, 3.2, 3.2])),
     impedance(WireSize::Awg10, [0.05, 0.063], [1.2, 1.2, 1.2], Some([2.0, 2.0, 2.0])),

@@ -33,14 +33,14 @@ impl AmpacityRow {
 
 /// The row of Table 310.16 for `size`.
 pub fn ampacity_row(size: WireSize) -> Option<AmpacityRow> {
-    AMPACITY_ROWS.into_iter().find(|row| row.size == size)
+    AMPACITY_ROWS.iter().find(|row| row.size == size).copied()
 }
 
 /// The ambient factor of the band in which `ambient` lies, on the base of 30 °C; between two bands the hotter one.
 /// `None` above the last band of the column: the insulation must not be used there.
 pub fn ambient_factor(ambient: Temperature, column: Column) -> Option<Ratio> {
     let band = AMBIENT_BANDS
-        .into_iter()
+        .iter()
         .find(|band| reaches(band.up_to_celsius, ambient.to_celsius()))?;
     let [c60, c75, c90] = band.factors;
     match column {
@@ -54,7 +54,7 @@ pub fn ambient_factor(ambient: Temperature, column: Column) -> Option<Ratio> {
 /// The factor for `carrying` current-carrying conductors in one raceway or bundle.
 pub fn count_factor(carrying: u32) -> Ratio {
     COUNT_BANDS
-        .into_iter()
+        .iter()
         .find(|band| band.up_to.is_none_or(|most| carrying <= most))
         .map_or(Ratio::per_cent(LEAST_COUNT_PER_CENT), |band| {
             Ratio::per_cent(band.per_cent)
@@ -64,8 +64,9 @@ pub fn count_factor(carrying: u32) -> Ratio {
 /// The grounding conductor of the first row of Table 250.122 not below `device`.
 pub fn grounding_conductor(device: Current, metal: Metal) -> Option<WireSize> {
     GROUNDING_ROWS
-        .into_iter()
+        .iter()
         .find(|row| reaches(row.device.to_amperes(), device.to_amperes()))
+        .copied()
         .map(|row| match metal {
             Metal::Copper => row.copper,
             Metal::Aluminium => row.aluminium,
@@ -82,7 +83,7 @@ const fn row(size: WireSize, amperes: [Option<f64>; 6], known: Known) -> Ampacit
 
 /// Table 310.16: 30 °C ambient, not more than three current-carrying conductors.
 #[rustfmt::skip]
-pub const AMPACITY_ROWS: [AmpacityRow; 30] = [
+pub static AMPACITY_ROWS: [AmpacityRow; 30] = [
     row(WireSize::Awg18, [None, None, Some(14.0), None, None, None], Known::CrossChecked),
     row(WireSize::Awg16, [None, None, Some(18.0), None, None, None], Known::CrossChecked),
     row(WireSize::Awg14, [Some(15.0), Some(20.0), Some(25.0), None, None, None], Known::CrossChecked),
@@ -126,7 +127,7 @@ pub struct AmbientBand {
 
 /// Table 310.15(B)(1)(1), ambient other than 30 °C.
 #[rustfmt::skip]
-pub const AMBIENT_BANDS: [AmbientBand; 16] = [
+pub static AMBIENT_BANDS: [AmbientBand; 16] = [
     AmbientBand { up_to_celsius: 10.0, factors: [Some(1.29), Some(1.2), Some(1.15)] },
     AmbientBand { up_to_celsius: 15.0, factors: [Some(1.22), Some(1.15), Some(1.12)] },
     AmbientBand { up_to_celsius: 20.0, factors: [Some(1.15), Some(1.11), Some(1.08)] },
@@ -158,7 +159,7 @@ const LEAST_COUNT_PER_CENT: f64 = 35.0;
 
 /// Table 310.15(C)(1), more than three current-carrying conductors.
 #[rustfmt::skip]
-pub const COUNT_BANDS: [CountBand; 7] = [
+pub static COUNT_BANDS: [CountBand; 7] = [
     CountBand { up_to: Some(3), per_cent: 100.0 },
     CountBand { up_to: Some(6), per_cent: 80.0 },
     CountBand { up_to: Some(9), per_cent: 70.0 },
@@ -181,7 +182,7 @@ pub struct GroundingRow {
 
 /// Table 250.122, smallest equipment grounding conductors.
 #[rustfmt::skip]
-pub const GROUNDING_ROWS: [GroundingRow; 19] = [
+pub static GROUNDING_ROWS: [GroundingRow; 19] = [
     GroundingRow { device: Current::amperes(15.0), copper: WireSize::Awg14, aluminium: WireSize::Awg12 },
     GroundingRow { device: Current::amperes(20.0), copper: WireSize::Awg12, aluminium: WireSize::Awg10 },
     GroundingRow { device: Current::amperes(60.0), copper: WireSize::Awg10, aluminium: WireSize::Awg8 },

@@ -87,11 +87,11 @@ impl MotorRow {
 /// A power between two rows takes the next row up, which is the cautious of the two usual readings.
 pub fn motor_row(power: ShaftPower, voltage: MotorVoltage) -> Option<(MotorRow, bool)> {
     let row = MOTOR_ROWS
-        .into_iter()
+        .iter()
         .find(|row| reaches(row.power.to_watts(), power.to_watts()))?;
     row.current(voltage)?;
     let is_exact = reaches(power.to_watts(), row.power.to_watts());
-    Some((row, is_exact))
+    Some((*row, is_exact))
 }
 
 const fn row(horsepower: f64, amperes: [Option<f64>; 6]) -> MotorRow {
@@ -106,7 +106,7 @@ pub const MOTOR_ROWS_KNOWN: Known = Known::CrossChecked;
 
 /// Table 430.250, induction motors, squirrel cage and wound rotor; columns 115, 200, 208, 230, 460, 575 V, amperes.
 #[rustfmt::skip]
-pub const MOTOR_ROWS: [MotorRow; 27] = [
+pub static MOTOR_ROWS: [MotorRow; 27] = [
     row(0.5, [Some(4.4), Some(2.5), Some(2.4), Some(2.2), Some(1.1), Some(0.9)]),
     row(0.75, [Some(6.4), Some(3.7), Some(3.5), Some(3.2), Some(1.6), Some(1.3)]),
     row(1.0, [Some(8.4), Some(4.8), Some(4.6), Some(4.2), Some(2.1), Some(1.7)]),

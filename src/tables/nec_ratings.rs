@@ -19,7 +19,7 @@ pub const LARGEST_CLASS_CC: Current = Current::amperes(30.0);
 /// The standard ratings for `device`, smallest first.
 pub fn ratings(device: DeviceType, edition: Edition) -> impl Iterator<Item = Current> + Clone {
     STANDARD_RATINGS
-        .into_iter()
+        .iter()
         .filter(move |row| match (device, edition) {
             (DeviceType::InverseTimeBreaker, Edition::Nec2023) => row.is_breaker_rating_2023,
             (DeviceType::TimeDelayFuse | DeviceType::NontimeDelayFuse, _) => true,
@@ -49,7 +49,7 @@ const fn row(amperes: f64, is_breaker_rating_2023: bool) -> StandardRating {
 
 /// 240.6(A). The 10 A breaker is new in 2023; 1, 3, 6 and 601 A are ratings of fuses alone.
 #[rustfmt::skip]
-pub const STANDARD_RATINGS: [StandardRating; 42] = [
+pub static STANDARD_RATINGS: [StandardRating; 42] = [
     row(1.0, false),
     row(3.0, false),
     row(6.0, false),

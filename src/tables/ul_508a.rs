@@ -31,7 +31,7 @@ pub const INSIDE_ROWS_KNOWN: Known = Known::FromMemory;
 
 /// The row of Table 28.1 for `size`.
 pub fn inside_row(size: WireSize) -> Option<InsideRow> {
-    INSIDE_ROWS.into_iter().find(|row| row.size == size)
+    INSIDE_ROWS.iter().find(|row| row.size == size).copied()
 }
 
 const fn row(size: WireSize, amperes_60: Option<f64>, amperes_75: f64) -> InsideRow {
@@ -44,7 +44,7 @@ const fn row(size: WireSize, amperes_60: Option<f64>, amperes_75: f64) -> Inside
 
 /// Table 28.1: size, amperes at 60 °C, amperes at 75 °C.
 #[rustfmt::skip]
-pub const INSIDE_ROWS: [InsideRow; 24] = [
+pub static INSIDE_ROWS: [InsideRow; 24] = [
     row(WireSize::Awg14, Some(15.0), 15.0),
     row(WireSize::Awg12, Some(20.0), 20.0),
     row(WireSize::Awg10, Some(30.0), 30.0),

@@ -53,7 +53,7 @@ pub(super) fn band_of(air: Temperature) -> Temperature {
 /// The edges of the bands from 30 °C up, coolest first.
 pub(super) fn band_edges() -> impl Iterator<Item = Temperature> + Clone {
     AMBIENT_BANDS
-        .into_iter()
+        .iter()
         .map(|band| band.up_to_celsius)
         .filter(|edge| *edge >= 30.0)
         .map(Temperature::celsius)
