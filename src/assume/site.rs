@@ -87,6 +87,8 @@ pub struct SheetInputs {
 /// Fills the gaps of the sheet itself.
 pub fn site(sheet: &Sheet) -> SheetInputs {
     let mut reader = Reader::of(&sheet.record, Holder::Sheet);
+    let basis = basis(&mut reader);
+    reader.choice_or(Field::Units, Choice::UsCustomary);
     let ambient = reader.quantity_or(Field::RoomAmbient, Temperature::celsius(40.0));
     let voltage: Option<Given<Voltage>> = reader.quantity(Field::SupplyVoltage);
     let frequency = reader.quantity_or(Field::SupplyFrequency, Frequency::hertz(60.0));
@@ -121,8 +123,7 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
     let enclosure = enclosure(&mut reader);
     SheetInputs {
         site: Site {
-            // The one basis worked so far; the seam where the sheet's own choice will be read.
-            basis: Basis::Nec(Edition::Nec2023),
+            basis,
             supply,
             ambient,
         },
@@ -139,6 +140,13 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
         enclosure,
         assumptions: reader.into_assumptions(),
     }
+}
+
+/// The basis by which the sheet is worked. One basis in one edition is offered so far: another is read here.
+fn basis(reader: &mut Reader<'_>) -> Basis {
+    reader.choice_or(Field::Basis, Choice::Nec);
+    reader.choice_or(Field::Edition, Choice::Nec2023);
+    Basis::Nec(Edition::Nec2023)
 }
 
 fn enclosure(reader: &mut Reader<'_>) -> EnclosureInputs {
