@@ -331,6 +331,20 @@ fn aluminium_inside_is_a_stop() {
 }
 
 #[test]
+fn an_aluminium_size_entered_inside_is_not_given_the_ampacity_of_copper() {
+    // Table 28.1 is of copper alone: 6 AWG of aluminium has no ampacity there.
+    let run = RunInput {
+        metal: entered(Metal::Aluminium),
+        size: Some(WireSize::Awg6),
+        ..inside_run(None)
+    };
+    let (sized, notes) = sized(&run, 20.0);
+    assert_eq!(sized.installed(), Some(WireSize::Awg6));
+    assert!(sized.ampacity.is_none(), "{:?}", sized.ampacity);
+    assert_eq!(only_note(&notes, "aluminium-inside").grade, Grade::Stop);
+}
+
+#[test]
 fn aluminium_in_the_field_has_its_own_columns() {
     // 20 A: 25 A at 75 °C: 12 AWG aluminium has 20, 10 AWG 30; copper 12 AWG has 25.
     for (metal, size) in [

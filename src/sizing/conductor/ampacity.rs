@@ -4,9 +4,9 @@ use super::{RunInput, Surrounding, Terminal};
 use crate::math::reaches;
 use crate::quantity::{Current, Quantity, Ratio, Temperature, WireSize};
 use crate::sizing::rules;
-use crate::tables::Column;
 use crate::tables::nec_conductors::{ambient_factor, ampacity_row, count_factor};
 use crate::tables::ul_508a::inside_row;
+use crate::tables::{Column, Metal};
 use crate::working::{Amount, Figure, Term};
 use std::sync::Arc;
 
@@ -52,7 +52,9 @@ pub(super) fn ampacities(
         // Inside, wire of a cooler insulation than the terminals is read by its insulation.
         Surrounding::Inside { .. } => {
             let column = by_terminals.min(input.insulation.value);
-            let cell = inside_row(size).and_then(|row| row.ampacity(column));
+            // Table 28.1 is of copper alone.
+            let row = inside_row(size).filter(|_| input.metal.value == Metal::Copper);
+            let cell = row.and_then(|row| row.ampacity(column));
             (column, cell, &rules::INSIDE_CELL)
         }
         Surrounding::Field { .. } => {
