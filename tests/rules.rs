@@ -1378,6 +1378,49 @@ fn conductors_inside_are_two_metres_a_run_until_entered() {
 }
 
 #[test]
+fn heat_which_cannot_be_worked_is_named_and_not_left_out_in_silence() {
+    // A drive and a device whose losses are entered, and a motor known by its current alone: half a per cent of its power
+    // is not known.
+    let with = |more: &[(Field, Entry)]| {
+        let mut entries = vec![
+            (Field::Tag, text("P-1")),
+            (Field::MotorCurrent, amperes(52.0)),
+            (Field::DriveInput, amperes(50.0)),
+            (Field::DriveLoss, watts(810.0)),
+            (Field::DeviceLoss, watts(15.0)),
+        ];
+        entries.extend_from_slice(more);
+        panel_of(&[], &[entries])
+    };
+    let reactor = (Field::ReactorPercent, per_cent(3.0));
+    assert_no_note(&with(&[]).notes, "ledger-incomplete");
+    let loss = (Field::ReactorLoss, watts(120.0));
+    assert_no_note(
+        &with(&[reactor.clone(), loss.clone()]).notes,
+        "ledger-incomplete",
+    );
+    let unknown = with(std::slice::from_ref(&reactor));
+    assert_eq!(
+        only_note(&unknown.notes, "ledger-incomplete").grade,
+        Grade::Query
+    );
+    // Its loss is entered, but what its percentage refers to is not: it is no reactor yet, and its loss is missing.
+    let own = (Field::ReactorReference, choice(Choice::OfOwnCurrent));
+    let unreferred = with(&[reactor, loss, own]);
+    assert!(unreferred.feeders[0].heat.reactor.is_none());
+    only_note(&unreferred.notes, "ledger-incomplete");
+    // A motor known by its current and a drive without data: 3 per cent of an unknown power.
+    let bare = panel_of(
+        &[],
+        &[vec![
+            (Field::MotorCurrent, amperes(52.0)),
+            (Field::DriveInput, amperes(50.0)),
+        ]],
+    );
+    only_note(&bare.notes, "ledger-incomplete");
+}
+
+#[test]
 fn a_control_supply_loses_what_its_efficiency_leaves() {
     // 240 W x (1 / 0.88 - 1) = 32.7273 W, 88 per cent being assumed.
     let worked = boxed(&[], &[(Field::SourceOutput, watts(240.0))]);

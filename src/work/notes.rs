@@ -5,7 +5,7 @@ use super::feeder::Feeder;
 use super::panel::tag_of;
 use crate::assume::SheetInputs;
 use crate::math::reaches;
-use crate::quantity::{Current, Temperature, WireSize};
+use crate::quantity::{Current, Ratio, Temperature, WireSize};
 use crate::sheet::{Item, Sheet};
 use crate::sizing::conductor::cells_from_memory;
 use crate::sizing::panel::IncomingCircuit;
@@ -58,8 +58,16 @@ pub(super) fn note_sheet(
         );
     }
     let without_heat = tags(feeders, |feeder| {
+        let heat = &feeder.worked.heat;
+        let has_reactor = feeder
+            .inputs
+            .reactor
+            .as_ref()
+            .is_some_and(|percent| percent.value > Ratio::of_one(0.0));
         has_load(feeder)
-            && (feeder.worked.heat.drive.is_none() || feeder.worked.heat.device.is_none())
+            && (heat.drive.is_none()
+                || heat.device.is_none()
+                || (has_reactor && heat.reactor.is_none()))
     });
     if !without_heat.is_empty() {
         tell(
