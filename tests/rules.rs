@@ -1656,6 +1656,20 @@ fn a_drive_in_air_hotter_than_its_full_current_allows_is_a_query() {
 }
 
 #[test]
+fn a_drive_in_a_room_hotter_than_its_limit_is_a_query_before_the_enclosure_is_known() {
+    // No measures, so no temperature inside; but nothing cools it below the 41 °C around it.
+    let drive = vec![(Field::MotorPower, horsepower(3.0))];
+    let hot = panel_of(
+        &[(Field::RoomAmbient, celsius(41.0))],
+        std::slice::from_ref(&drive),
+    );
+    assert!(hot.enclosure.air.inside.is_none());
+    assert_eq!(only_note(&hot.notes, "drive-too-hot").grade, Grade::Query);
+    let cool = panel_of(&[(Field::RoomAmbient, celsius(40.0))], &[drive]);
+    assert_no_note(&cool.notes, "drive-too-hot");
+}
+
+#[test]
 fn a_drive_with_its_heatsink_outside_goes_by_the_hotter_of_both_airs() {
     // 46 °C around. At 47 °C inside the inside governs. A limit of 44 °C, which no fan holds in such air, leaves it to the
     // outside.

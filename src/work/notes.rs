@@ -219,9 +219,8 @@ pub(super) fn note_drives(
     for feeder in feeders.iter().filter(|feeder| feeder.load.is_some()) {
         let holder = Holder::Feeder(feeder.worked.id);
         let limits = &feeder.inputs;
-        if let Some(air) = governing_air(inputs, feeder, inside)
-            && !reaches(limits.ambient_limit.value.to_kelvin(), air.to_kelvin())
-        {
+        let air = governing_air(inputs, feeder, inside);
+        if !reaches(limits.ambient_limit.value.to_kelvin(), air.to_kelvin()) {
             let kind = NoteKind::DriveTooHot {
                 air,
                 limit: limits.ambient_limit.value,
@@ -246,20 +245,21 @@ pub(super) fn note_drives(
     }
 }
 
-/// With a heatsink through the wall the hotter of inside and outside governs; else the inside.
+/// With a heatsink through the wall the hotter of inside and outside governs; else the inside. Where the inside is not
+/// known yet the outside stands for it: nothing cools the enclosure below the air around it.
 fn governing_air(
     inputs: &SheetInputs,
     feeder: &Feeder,
     inside: Option<&Given<Temperature>>,
-) -> Option<Temperature> {
-    let inside = inside?.value;
+) -> Temperature {
     let outside = inputs.site.ambient.value;
+    let inside = inside.map_or(outside, |inside| inside.value);
     let has_outside_heatsink = feeder.inputs.heatsink_share.value.to_one() > 0.0;
-    Some(if has_outside_heatsink && outside > inside {
+    if has_outside_heatsink && outside > inside {
         outside
     } else {
         inside
-    })
+    }
 }
 
 /// Several queries about one table become one which names all rows.
