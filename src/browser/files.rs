@@ -52,7 +52,7 @@ pub fn choose(input_id: &str) {
 }
 
 /// Reads the first file of a file input, and forgets it there so that the same file can be picked again.
-pub fn read_chosen(input_id: &str, most_bytes: u32, act: impl FnOnce(Picked) + 'static) {
+pub fn read_chosen(input_id: &str, most_bytes: usize, act: impl FnOnce(Picked) + 'static) {
     let input = super::page::element(input_id).and_then(|found| found.dyn_into().ok());
     let Some(input): Option<HtmlInputElement> = input else {
         return;
@@ -62,16 +62,18 @@ pub fn read_chosen(input_id: &str, most_bytes: u32, act: impl FnOnce(Picked) + '
 }
 
 /// Reads the first file of those which were dropped on the page.
-pub fn read_dropped(
-    event: &web_sys::DragEvent,
-    most_bytes: u32,
-    act: impl FnOnce(Picked) + 'static,
-) {
-    let files = event.data_transfer().and_then(|transfer| transfer.files());
-    read_first(files, most_bytes, act);
+pub fn read_dropped(event: &web_sys::Event, most_bytes: usize, act: impl FnOnce(Picked) + 'static) {
+    let transfer = event
+        .dyn_ref::<web_sys::DragEvent>()
+        .and_then(web_sys::DragEvent::data_transfer);
+    read_first(
+        transfer.and_then(|transfer| transfer.files()),
+        most_bytes,
+        act,
+    );
 }
 
-fn read_first(files: Option<FileList>, most_bytes: u32, act: impl FnOnce(Picked) + 'static) {
+fn read_first(files: Option<FileList>, most_bytes: usize, act: impl FnOnce(Picked) + 'static) {
     let Some(file) = files.and_then(|files| files.get(0)) else {
         return;
     };
@@ -83,8 +85,9 @@ fn read_first(files: Option<FileList>, most_bytes: u32, act: impl FnOnce(Picked)
     });
 }
 
-async fn read(file: &File, most_bytes: u32) -> Content {
-    if file.size() > f64::from(most_bytes) {
+async fn read(file: &File, most_bytes: usize) -> Content {
+    let most = u32::try_from(most_bytes).map_or(f64::MAX, f64::from);
+    if file.size() > most {
         return Content::TooLarge;
     }
     let text = JsFuture::from(file.text()).await.ok();

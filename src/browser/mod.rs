@@ -13,19 +13,21 @@ use wasm_bindgen::JsCast;
 use wasm_bindgen::closure::Closure;
 
 /// Calls `act` for every `name` event which reaches the window, for as long as the page lives.
-pub fn on_window<E: JsCast + 'static>(name: &str, mut act: impl FnMut(E) + 'static) {
+pub fn on_window(name: &str, act: impl FnMut(page::Event) + 'static) {
     let Some(window) = web_sys::window() else {
         return;
     };
-    let listener = Closure::<dyn FnMut(web_sys::Event)>::new(move |event: web_sys::Event| {
-        if let Ok(event) = event.dyn_into() {
-            act(event);
-        }
-    });
+    let listener = Closure::<dyn FnMut(page::Event)>::new(act);
     let added = window.add_event_listener_with_callback(name, listener.as_ref().unchecked_ref());
     if added.is_ok() {
         listener.forget();
     }
+}
+
+/// Calls `act` once what has been changed until now shows on the page, and before any other event is heard.
+pub fn soon(act: impl FnOnce() + 'static) {
+    // Changes are drawn by tasks which already wait in the same line.
+    js_sys::futures::spawn_local(async move { act() });
 }
 
 /// Calls `act` once, just before the browser paints next.

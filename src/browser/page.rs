@@ -1,7 +1,41 @@
 //! The page itself: elements by id, focus, title, print.
 
 use wasm_bindgen::JsCast;
-use web_sys::{Document, Element, EventTarget, HtmlElement, HtmlInputElement};
+use web_sys::{Document, Element, HtmlDialogElement, HtmlElement, HtmlInputElement, KeyboardEvent};
+pub use web_sys::{Event, EventTarget};
+
+/// A key which was pressed.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub struct Key {
+    /// The letter it gives, or its name.
+    pub name: String,
+    /// Whether Control (on some machines, Command) is held.
+    pub control: bool,
+    /// Whether Alt is held.
+    pub alt: bool,
+    /// Whether Shift is held.
+    pub shift: bool,
+    /// Whether it takes part in composing a letter.
+    pub is_composing: bool,
+}
+
+/// The key of an event; `None` where the event is of another kind.
+pub fn key(event: &Event) -> Option<Key> {
+    let event: &KeyboardEvent = event.dyn_ref()?;
+    Some(Key {
+        name: event.key(),
+        control: event.ctrl_key() || event.meta_key(),
+        alt: event.alt_key(),
+        shift: event.shift_key(),
+        is_composing: event.is_composing(),
+    })
+}
+
+/// The key is taken: neither the browser nor anything around hears it again.
+pub fn take(event: &Event) {
+    event.prevent_default();
+    event.stop_propagation();
+}
 
 /// The element with this id.
 pub fn element(id: &str) -> Option<HtmlElement> {
@@ -15,16 +49,16 @@ pub fn focus(id: &str) -> bool {
 
 /// Moves the focus to the element with this id once the page has been brought up to date.
 pub fn focus_soon(id: String) {
-    super::on_next_frame(move || {
+    super::soon(move || {
         focus(&id);
     });
 }
 
 /// As [`focus_soon`], and selects the text of an input.
-pub fn focus_and_select_soon(id: String) {
-    super::on_next_frame(move || {
-        if focus(&id)
-            && let Some(input) = element(&id).and_then(|found| found.dyn_into().ok())
+pub fn focus_and_select_soon(id: &'static str) {
+    super::soon(move || {
+        if focus(id)
+            && let Some(input) = element(id).and_then(|found| found.dyn_into().ok())
         {
             let input: HtmlInputElement = input;
             input.select();
@@ -34,27 +68,27 @@ pub fn focus_and_select_soon(id: String) {
 
 /// Brings the element with this id into view once the page has been brought up to date.
 pub fn show_soon(id: String) {
-    super::on_next_frame(move || {
+    super::soon(move || {
         if let Some(element) = element(&id) {
             element.scroll_into_view();
         }
     });
 }
 
-/// The id of the element which has the focus.
-pub fn focused_id() -> Option<String> {
-    Some(document()?.active_element()?.id())
+/// The id of the nearest element around the focus which `selector` describes.
+pub fn focused_within(selector: &str) -> Option<String> {
+    let around = document()?.active_element()?.closest(selector).ok()??;
+    Some(around.id())
+}
+
+/// Whether the window has the focus, and not another one.
+pub fn has_focus() -> bool {
+    document().is_some_and(|document| document.has_focus().unwrap_or(true))
 }
 
 /// Whether the person is typing or choosing somewhere, so that keys belong to that place.
 pub fn is_entering() -> bool {
-    let focused = document().and_then(|document| document.active_element());
-    focused.is_some_and(|element| is_entry(&element))
-}
-
-/// Whether an element takes keys of its own.
-pub fn is_entry(element: &Element) -> bool {
-    matches!(element.tag_name().as_str(), "INPUT" | "SELECT" | "TEXTAREA")
+    focused_within("input, select, textarea").is_some()
 }
 
 /// The nearest element around the target of an event, itself included, which `selector` describes.
@@ -76,12 +110,48 @@ pub fn typed(target: Option<EventTarget>) -> Option<String> {
     Some(area.value())
 }
 
+/// The text in the input or list with this id.
+pub fn typed_in(id: &str) -> Option<String> {
+    typed(element(id).map(Into::into))
+}
+
+/// Puts a text into the input which an event is about.
+pub fn set_typed(target: Option<EventTarget>, text: &str) {
+    let Some(target) = target else {
+        return;
+    };
+    if let Some(input) = target.dyn_ref::<HtmlInputElement>() {
+        input.set_value(text);
+    } else if let Some(area) = target.dyn_ref::<web_sys::HtmlTextAreaElement>() {
+        area.set_value(text);
+    }
+}
+
 /// Sets an attribute of the element with this id, if it is there.
 pub fn set_attribute(id: &str, name: &str, value: &str) {
     if let Some(element) = element(id) {
         // Fails only for names which are none.
         let _ = element.set_attribute(name, value);
     }
+}
+
+/// Opens the dialog with this id over the page.
+pub fn open_dialog(id: &str) {
+    if let Some(dialog) = dialog(id) {
+        // Refused only where it is open already.
+        let _ = dialog.show_modal();
+    }
+}
+
+/// Closes the dialog with this id; the focus goes back to where it was.
+pub fn close_dialog(id: &str) {
+    if let Some(dialog) = dialog(id) {
+        dialog.close();
+    }
+}
+
+fn dialog(id: &str) -> Option<HtmlDialogElement> {
+    element(id)?.dyn_into().ok()
 }
 
 /// Names the page; a browser offers this name for a printed file.

@@ -35,14 +35,15 @@ pub fn remove(key: &str) {
 
 /// Calls `act` with the new text whenever another tab changes what is under `key`.
 pub fn on_change_elsewhere(key: &'static str, mut act: impl FnMut(Option<String>) + 'static) {
-    super::on_window("storage", move |event: StorageEvent| {
-        if event.key().as_deref() == Some(key) {
+    super::on_window("storage", move |event| {
+        if let Some(event) = event.dyn_ref::<StorageEvent>()
+            && event.key().as_deref() == Some(key)
+        {
             act(event.new_value());
         }
     });
 }
 
 fn storage() -> Option<Storage> {
-    let storage = web_sys::window()?.local_storage().ok().flatten()?;
-    storage.dyn_into().ok()
+    web_sys::window()?.local_storage().ok().flatten()
 }
