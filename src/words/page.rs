@@ -28,6 +28,7 @@ texts! {
 
     // The bar at the head of the window.
     bar_label = "Sheet and files";
+    files_label = "Files and print";
     new_sheet = "New sheet";
     open_file = "Open file";
     save_file = "Save file";
@@ -43,6 +44,7 @@ texts! {
 
     // The sheet and its parts.
     untitled = "Untitled sheet";
+    the_panel = "Panel";
     heading_title = "Title block";
     heading_supply = "Supply";
     heading_feeders = "Feeders";
@@ -87,6 +89,7 @@ texts! {
     assumed_hint = "assumed";
     clear_entry = "Empty this field";
     take_assumed = "Go back to the assumed value";
+    typed_not_taken = "It was typed, but not yet taken. Press Enter in it to take it.";
     choose_none = "not entered";
     unit_hint = "A unit may be typed after the number.";
     refused_label = "Not taken";
@@ -98,6 +101,9 @@ texts! {
     delete_feeder = "Delete";
     move_up = "Move up";
     move_down = "Move down";
+    feeder_commands = "The feeder with the cursor";
+    feeder_before = "Feeder before";
+    feeder_after = "Feeder after";
     feeder_form_open = "All fields of this feeder";
     feeder_form_title = "Feeder in full";
     group_driven = "What is driven";
@@ -121,6 +127,18 @@ texts! {
     head_running = "running together";
     head_connected = "connected";
     head_total = "Total";
+    head_share = "Share of the whole";
+    head_limit = "Limit";
+    head_verdict = "Verdict";
+    head_ground = "Ground";
+    head_of = "Of";
+    head_field = "Field";
+    head_value = "Value";
+    head_reason = "Reason";
+    unit_reactor = "mH";
+    unit_drop = "%";
+    unit_heat = "W";
+    none_fits = "none fits";
     grid_label = "Feeders, one in each row";
     grid_help = "Arrow keys move, typing replaces, Enter or F2 edits, Escape gives up the edit.";
     standing_by_mark = "stands by";
@@ -128,6 +146,7 @@ texts! {
     // Other sources of heat.
     add_source = "Add source";
     delete_source = "Delete source";
+    source_added = "Source of heat added.";
     source_unnamed = "Unnamed source";
 
     // Worked values.
@@ -136,7 +155,9 @@ texts! {
     conductors_ahead = "Conductors ahead of the drive";
     conductors_behind = "Conductors behind the drive";
     conductors_incoming = "Incoming conductors";
+    size = "Size";
     required_ampacity = "Ampacity required";
+    required_connected = "Ampacity required for everything connected";
     usable_ampacity = "Ampacity of the size";
     smaller_size = "Next smaller size";
     grounding_conductor = "Equipment grounding conductor";
@@ -144,19 +165,42 @@ texts! {
     main_device = "Main device";
     disconnect = "Disconnect, at least";
     voltage_drop = "Voltage drop";
+    voltage_drop_share = "Voltage drop, share of the supply";
+    drop_of_both = "Voltage drop of both runs";
+    heat_of_run = "Heat inside";
+    motor_full_load_current = "Motor full-load current";
+    drive_input_current = "Drive rated input current";
+    device_product = "Motor current by the percentage";
+    device_largest = "Largest device permitted";
+    source_ratio = "Source power by drive power";
+    source_impedance = "Source impedance on the drive's base";
     reactor_entered = "Reactor entered";
     reactor_advised = "Reactor advised";
     reactor_not_needed = "none needed";
     reactor_none = "none";
     inductance = "Inductance of each phase";
     reactor_rated_current = "Rated current, at least";
+    reactor_heat = "Heat of the reactor";
+    drive_loss = "Loss of the drive";
+    drive_inside = "Loss of the drive, inside";
+    device_heat = "Heat of the device";
+    conductor_heat = "Heat of conductors inside";
+    feeder_heat = "Heat of the feeder, inside";
     running_current = "Running current";
     connected_current = "Connected current";
+    main_sum = "Sum for the main device";
+    main_sum_by_inputs = "The same sum by drive input currents";
+    main_largest = "Largest main device permitted";
+    transformer_current = "Transformer full-load current";
+    run_factor = "Factor f of the incoming run";
+    multiplier = "Multiplier M of the incoming run";
     fault_at_source = "Fault current at the start of the incoming run";
     fault_at_panel = "Fault current at the panel";
     lowest_rating = "Lowest rating inside";
     surface = "Effective surface";
     conductance = "Heat through the walls";
+    sealed_rise = "Temperature rise when sealed";
+    air_inside = "Air inside, as the sheet goes by";
     sealed_inside = "Air inside when sealed";
     air_density = "Density of the inlet air";
     site_pressure = "Air pressure of the site";
@@ -187,6 +231,7 @@ texts! {
     strip_pinned = "pinned";
     strip_whole = "Whole chain";
     strip_short = "First step only";
+    key_space = "Space";
 
     // Cautions.
     caution_label = "Caution";
@@ -195,6 +240,7 @@ texts! {
 
     // Where the sheet is kept.
     saved_here = "Saved in this browser";
+    not_kept_here = "Not kept in this browser";
     saving = "Saving in this browser";
     not_in_file = "Not yet in a file";
     changed_since_file = "Changed since it was saved as a file";
@@ -204,9 +250,13 @@ texts! {
     store_missing = "This browser keeps nothing for this page, perhaps because it is a private window. Save the sheet as a file before you close it.";
     store_unreadable = "What this browser kept of the last sheet could not be read. It is kept as it is; you can save it as a file and look at it.";
     save_kept_text = "Save what was kept as a file";
+    rescued_earlier = "A sheet which could not be opened earlier is still kept in this browser.";
+    rescued_drop = "I do not need it any more";
     other_tab = "This sheet was changed in another tab. Nothing is lost: choose which of the two to go on with.";
     other_tab_take = "Take the other tab's sheet";
     other_tab_keep = "Keep this one";
+    other_tab_taken = "The other tab's sheet is open here now. Undo brings this tab's back.";
+    other_tab_name = "the other tab's sheet";
     leave_unsaved = "The last change is not yet kept.";
 
     // Files.
@@ -216,15 +266,20 @@ texts! {
     file_refused_kept = "The sheet you had open is unchanged.";
     file_unreadable = "The browser could not read the file. It may have been moved, or be in use elsewhere.";
     file_too_large = "The file is too large to be a sheet.";
+    save_failed_title = "The file was not saved.";
+    save_failed = "The browser could not write it. The sheet is still on this page; try another place or name.";
+    sheet_replaced = "An empty sheet is open. Undo brings the former one back.";
     open_replaces = "The open sheet is not in a file. Opening another one replaces it; undo brings it back until this tab is closed.";
     new_replaces = "The open sheet is not in a file. A new sheet replaces it; undo brings it back until this tab is closed.";
     default_file_name = "ventrail-sheet";
+    rescued_file_name = "ventrail-rescued.json";
 
     // The printed summary.
     print_title = "Panel heat and protection summary";
     print_sheet = "Sheet";
     print_version = "Ventrail version";
     print_planning = "Planning figures, not an approval";
+    print_conditions = "Conditions";
     print_review = "Review";
     print_prepared_by = "Prepared by";
     print_reviewed_by = "Reviewed by";
@@ -273,7 +328,10 @@ pub const fn grid_keys() -> &'static [(&'static str, &'static str)] {
         ("Home, End", "first cell, last cell of the row"),
         ("Ctrl+Home, Ctrl+End", "first row, last row"),
         ("Alt+Up, Alt+Down", "move the feeder up, down"),
-        ("Ctrl+D", "duplicate the feeder"),
+        ("Ctrl+Enter", "add a feeder below"),
+        ("Ctrl+Shift+Enter", "duplicate the feeder"),
+        ("Ctrl+Delete", "delete the feeder"),
+        ("Alt+Enter", "open all fields of the feeder"),
     ]
 }
 
@@ -285,7 +343,8 @@ pub const fn page_keys() -> &'static [(&'static str, &'static str)] {
         ("Ctrl+S", "save the sheet as a file"),
         ("Ctrl+O", "open a file"),
         ("Ctrl+P", "print the summary"),
-        ("F8, Shift+F8", "next margin note, previous margin note"),
+        ("F8, Shift+F8", "next margin note; back to the one before"),
+        ("P", "pin the working in the strip below, or let it go"),
     ]
 }
 
@@ -322,6 +381,11 @@ pub fn feeder_counts(feeders: usize, standing_by: &[String]) -> String {
             listed(many)
         ),
     }
+}
+
+/// How much is assumed.
+pub fn assumption_count(count: usize) -> String {
+    counted(count, "value", "values")
 }
 
 /// Words in a row: `a`, `a and b`, `a, b and c`.
@@ -371,6 +435,111 @@ pub fn redo_named(edit: &str) -> String {
 /// A feeder without a tag, by its row, counted from one.
 pub fn untagged_feeder(row: usize) -> String {
     format!("feeder in row {row}")
+}
+
+/// A source of heat without a name, by its row, counted from one.
+pub fn unnamed_source(row: usize) -> String {
+    format!("source of heat in row {row}")
+}
+
+/// Something of a feeder: `P-402, branch device`.
+pub fn of_feeder(tag: &str, what: &str) -> String {
+    format!("{tag}, {}", lower_first(what))
+}
+
+/// Something within a group: `Conductors ahead of the drive, ampacity of the size`.
+pub fn of_group(group: &str, what: &str) -> String {
+    format!("{group}, {}", lower_first(what))
+}
+
+/// A reactor of a percentage with its inductance, whose unit stands in the head.
+pub fn reactor_of(percent: &str, inductance: &str) -> String {
+    format!("{percent}, {inductance}")
+}
+
+/// A reactor which is advised, not entered.
+pub fn reactor_only_advised(percent: &str) -> String {
+    format!("({percent} advised)")
+}
+
+/// A value which counts in the connected total only.
+pub fn standing_by_value(value: &str) -> String {
+    format!("({value})")
+}
+
+/// The limit of a total: `limit 45 °C`.
+pub fn limit_of(limit: &str, value: &str) -> String {
+    format!("{limit} {value}")
+}
+
+/// Why a value is assumed.
+pub fn assumed_because(reason: &str) -> String {
+    format!("assumed: {reason}")
+}
+
+/// The first answer of a list while another one is assumed.
+pub fn assumed_option(answer: &str) -> String {
+    format!("{answer} (assumed)")
+}
+
+/// What a field takes.
+pub fn accepts(range: &str) -> String {
+    format!("Takes {range}.")
+}
+
+/// The text as it was typed, where it is shown in other units.
+pub fn typed_as(text: String) -> String {
+    format!("Typed as {text}.")
+}
+
+/// What still counts while a typed text is refused.
+pub fn still_counts(value: &str) -> String {
+    format!("{value} still counts.")
+}
+
+/// Said aloud when a typed text was refused.
+pub fn refused(field: &str, why: &str) -> String {
+    format!("{field}: not taken. {why}")
+}
+
+/// Said aloud when a field was emptied.
+pub fn emptied(field: &str) -> String {
+    format!("{field} emptied")
+}
+
+/// Said aloud after undo.
+pub fn undone(edit: &str) -> String {
+    format!("Undone: {edit}")
+}
+
+/// Said aloud after redo.
+pub fn redone(edit: &str) -> String {
+    format!("Done again: {edit}")
+}
+
+/// Said aloud when a feeder was added.
+pub fn feeder_added(row: usize) -> String {
+    format!("Feeder added in row {row}")
+}
+
+/// Said aloud when a feeder was duplicated.
+pub fn feeder_duplicated(tag: &str) -> String {
+    format!("{tag} duplicated; the copy wants a tag of its own")
+}
+
+/// Said aloud when a feeder was deleted.
+pub fn feeder_deleted(tag: &str) -> String {
+    format!("{tag} deleted; undo brings it back")
+}
+
+/// Said aloud when a feeder was moved.
+pub fn feeder_moved(tag: &str, row: usize) -> String {
+    format!("{tag} is in row {row} now")
+}
+
+/// Said aloud when a source of heat was deleted.
+pub fn source_deleted(name: &str) -> String {
+    format!("{name} deleted; undo brings it back")
 }
 
 /// The heading of the form of one feeder.
