@@ -1,2 +1,4 @@
-//! The browser entry: mounts the page.
-fn main() {}
+//! The browser entry: puts the page into its place.
+fn main() {
+    ventrail::ui::start();
+}
