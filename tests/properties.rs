@@ -333,27 +333,35 @@ proptest! {
         }
     }
 
-    /// A figure in assumed ink stands for a field which is empty: the ink never hides an entry.
+    /// What a rule filled in is in the list of assumptions with its value, and stands for a field which is empty.
     #[test]
-    fn a_figure_in_assumed_ink_stands_for_an_empty_field(sheet in ordinary_sheet()) {
+    fn what_a_rule_fills_in_is_reported_as_assumed(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
         let worked = work_out(&sheet);
         for feeder in &worked.feeders {
-            let assumed_by_rule = [
-                (&Field::DriveInput, feeder.drive_input.as_ref().map(Given::ink)),
-                (&Field::DriveLoss, feeder.heat.drive.as_ref().map(Given::ink)),
-                (&Field::DeviceLoss, feeder.heat.device.as_ref().map(Given::ink)),
-                (&Field::ReactorLoss, feeder.heat.reactor.as_ref().map(Given::ink)),
+            let by_rule = [
+                (Field::DriveInput, feeder.drive_input.as_ref().map(|given| (given.ink(), Amount::from(given.value)))),
+                (Field::DriveLoss, inked(feeder.heat.drive.as_ref())),
+                (Field::DeviceLoss, inked(feeder.heat.device.as_ref())),
+                (Field::ReactorLoss, inked(feeder.heat.reactor.as_ref())),
             ];
-            for (field, ink) in assumed_by_rule {
-                let Some(ink) = ink else {
+            for (field, given) in by_rule {
+                let Some((ink, amount)) = given else {
                     continue;
                 };
-                let is_entered = entry_at(&sheet, place_of(feeder, *field)).is_some();
-                let wanted = if is_entered { Ink::Entered } else { Ink::Assumed };
-                prop_assert_eq!(ink, wanted, "{:?} of {:?}", field, feeder.tag);
+                let place = place_of(feeder, field);
+                let is_entered = entry_at(&sheet, place).is_some();
+                prop_assert_eq!(ink, if is_entered { Ink::Entered } else { Ink::Assumed }, "{:?}", place);
+                let reported = worked.assumptions.iter().find(|assumption| assumption.place == place);
+                let reported = reported.map(|assumption| &assumption.value);
+                let wanted = AssumedValue::Amount(amount);
+                prop_assert_eq!(reported, (!is_entered).then_some(&wanted), "{:?}", place);
             }
         }
     }
+}
+
+fn inked(heat: Option<&Given<Power>>) -> Option<(Ink, Amount)> {
+    heat.map(|heat| (heat.ink(), heat.value.into()))
 }
 
 fn place_of(feeder: &WorkedFeeder, field: Field) -> Place {

@@ -1,7 +1,7 @@
 //! One feeder: its currents, conductors, device, reactor and heat.
 
 use super::WorkedFeeder;
-use crate::assume::{FeederInputs, Site, feeder as filled};
+use crate::assume::{AssumedValue, Assumption, FeederInputs, Site, feeder as filled};
 use crate::math::reaches;
 use crate::quantity::{Current, Power, Ratio, Temperature, Voltage};
 use crate::sheet::Item;
@@ -14,8 +14,8 @@ use crate::sizing::panel::FeederLoad;
 use crate::sizing::reactor::{Reactor, ReactorInput, reactor_of};
 use crate::sizing::rules;
 use crate::working::{
-    Amount, Field, Figure, Given, Grade, Holder, HolderId, MarginNote, NoteKind, Run, RunField,
-    Term,
+    Amount, Field, Figure, Given, Grade, Holder, HolderId, Ink, MarginNote, NoteKind, Place, Run,
+    RunField, Term,
 };
 use std::sync::Arc;
 
@@ -40,6 +40,8 @@ pub(super) fn work_feeder(item: &Item, site: &Site, air_band: Option<Temperature
     let load = load_of(item.id, &inputs, &parts);
     let mut notes: Vec<MarginNote> = notes.into_iter().map(|note| note.held_by(holder)).collect();
     notes.sort_by_key(|note| note.grade);
+    let mut assumptions = inputs.assumptions.clone();
+    assumptions.extend(assumed_by_rules(holder, &parts));
     let worked = WorkedFeeder {
         id: item.id,
         tag: inputs.tag.clone(),
@@ -55,7 +57,7 @@ pub(super) fn work_feeder(item: &Item, site: &Site, air_band: Option<Temperature
         reactor: parts.reactor,
         heat: parts.heat,
         short_circuit_rating: inputs.short_circuit_rating.clone(),
-        assumptions: inputs.assumptions.clone(),
+        assumptions,
         notes,
     };
     Feeder {
@@ -64,6 +66,33 @@ pub(super) fn work_feeder(item: &Item, site: &Site, air_band: Option<Temperature
         inputs,
         air_band,
     }
+}
+
+/// What rules filled in: the drive's rated input current, and losses without data.
+fn assumed_by_rules(holder: Holder, parts: &Parts) -> Vec<Assumption> {
+    let heat = &parts.heat;
+    [
+        assumed_by_rule(holder, Field::DriveInput, parts.drive_input.as_ref()),
+        assumed_by_rule(holder, Field::DriveLoss, heat.drive.as_ref()),
+        assumed_by_rule(holder, Field::DeviceLoss, heat.device.as_ref()),
+        assumed_by_rule(holder, Field::ReactorLoss, heat.reactor.as_ref()),
+    ]
+    .into_iter()
+    .flatten()
+    .collect()
+}
+
+/// The assumption of a value which a rule filled in for `field`; `None` where it was entered.
+pub(super) fn assumed_by_rule<T: Copy + Into<Amount>>(
+    holder: Holder,
+    field: Field,
+    given: Option<&Given<T>>,
+) -> Option<Assumption> {
+    let given = given.filter(|given| given.ink() == Ink::Assumed)?;
+    Some(Assumption {
+        place: Place { holder, field },
+        value: AssumedValue::Amount(given.value.into()),
+    })
 }
 
 /// What is worked of a feeder, piece by piece.

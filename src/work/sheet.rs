@@ -1,7 +1,7 @@
 //! The whole sheet: feeders, the loop between air and sizes, panel and enclosure.
 
 use super::enclosure::{band_edges, band_of, enclosure_of, note_enclosure};
-use super::feeder::{Feeder, work_feeder};
+use super::feeder::{Feeder, assumed_by_rule, work_feeder};
 use super::ledger::ledger_of;
 use super::notes::{in_order, merge_memory_notes, note_drives, note_sheet};
 use super::panel::{fault_of, incoming_of, main_loss, ratings_of};
@@ -104,6 +104,8 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
             .flat_map(|feeder| feeder.worked.notes.clone()),
     );
     let mut assumptions = inputs.assumptions.clone();
+    let main_loss = settled.main_loss.as_ref();
+    assumptions.extend(assumed_by_rule(Holder::Sheet, Field::MainLoss, main_loss));
     assumptions.extend(
         settled
             .feeders
@@ -172,6 +174,7 @@ struct Settled {
     incoming: IncomingCircuit,
     ledger: Ledger,
     enclosure: WorkedEnclosure,
+    main_loss: Option<Given<Power>>,
     notes: Vec<MarginNote>,
 }
 
@@ -273,6 +276,7 @@ fn work_for(
         incoming,
         ledger,
         enclosure,
+        main_loss: main,
         notes,
     }
 }
