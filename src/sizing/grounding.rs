@@ -41,7 +41,8 @@ pub fn grounding_of(
     // Where no size has the area, the cap below decides all the same.
     let uncapped = size_of_area(wanted).unwrap_or(installed);
     let size = uncapped.min(installed);
-    if size < uncapped {
+    // A table size above the phase is everyday on motor circuits; a growth which stops there is worth a word.
+    if size < uncapped && grown.is_some() {
         notes.push(MarginNote::new(
             Grade::Note,
             field,
