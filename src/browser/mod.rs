@@ -4,6 +4,7 @@
 //! anywhere. Start with [`store`].
 
 pub mod clock;
+pub mod dom;
 pub mod files;
 pub mod page;
 pub mod panic;

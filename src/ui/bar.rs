@@ -95,7 +95,7 @@ pub(super) fn bar(page: Page) -> AnyView {
     several(vec![bar, live(move || messages(page))])
 }
 
-fn named(id: &'static str, text: &'static str, act: impl FnMut() + 'static) -> Markup {
+fn named(id: &'static str, text: &'static str, act: impl FnMut() + Send + 'static) -> Markup {
     button(act).id(id).text(text)
 }
 
@@ -104,7 +104,7 @@ fn step_button(
     id: &'static str,
     key: &'static str,
     step: impl Fn() -> Option<String> + Copy + Send + 'static,
-    act: impl FnMut() + 'static,
+    act: impl FnMut() + Send + 'static,
 ) -> Markup {
     button(act)
         .id(id)

@@ -44,13 +44,20 @@ pub fn start() {
         return;
     };
     leptos::mount::mount_to(place, sheet).forget();
+    // The page itself does not scroll: keys which scroll are to reach the part which does.
+    window::focus(PAD);
 }
+
+/// The id of the part which scrolls.
+const PAD: &str = "pad";
 
 fn sheet() -> AnyView {
     let page = Page::start();
     watch(page);
     let pad = tag("DIV")
         .class("pad")
+        .id(PAD)
+        .set("tabindex", "-1")
         .child(conditions::conditions(page, Group::Title))
         .child(summary::cautions(page))
         .child(summary::welcome(page))

@@ -21,15 +21,14 @@ pub(super) fn holder(document: &Document, holder: Holder) -> String {
 
 /// The name of a feeder or a source, whichever has this identity.
 pub(super) fn item(document: &Document, id: HolderId) -> String {
-    let is_source = document.sheet.sources.iter().any(|item| item.id == id);
-    holder(
-        document,
-        if is_source {
-            Holder::Source(id)
-        } else {
-            Holder::Feeder(id)
-        },
-    )
+    let has = |items: &[Arc<Item>]| items.iter().any(|item| item.id == id);
+    if has(&document.sheet.feeders) {
+        holder(document, Holder::Feeder(id))
+    } else if has(&document.sheet.sources) {
+        holder(document, Holder::Source(id))
+    } else {
+        page::a_row().to_owned()
+    }
 }
 
 /// What an edit does.

@@ -117,20 +117,19 @@ impl Page {
 
     /// Takes the last edit back.
     pub(super) fn undo(self) {
-        let named = self.history.with_untracked(|history| {
-            let edit = history.undoable()?;
-            Some(page::undone(&names::edit(edit, history.now())))
-        });
-        self.change_and_say(History::undo, named, page::nothing_to_undo());
+        let edit = self
+            .history
+            .with_untracked(|history| history.undoable().cloned());
+        // Named by the document it leads to: there a deleted feeder has its tag again.
+        self.change_and_say(History::undo, edit, page::undone, page::nothing_to_undo());
     }
 
     /// Does again what was taken back last.
     pub(super) fn redo(self) {
-        let named = self.history.with_untracked(|history| {
-            let edit = history.redoable()?;
-            Some(page::redone(&names::edit(edit, history.now())))
-        });
-        self.change_and_say(History::redo, named, page::nothing_to_redo());
+        let edit = self
+            .history
+            .with_untracked(|history| history.redoable().cloned());
+        self.change_and_say(History::redo, edit, page::redone, page::nothing_to_redo());
     }
 
     /// Puts a whole other document in place of this one; undo brings this one back.
@@ -174,14 +173,16 @@ impl Page {
     fn change_and_say(
         self,
         change: impl FnOnce(&mut History) -> bool,
-        named: Option<String>,
-        nothing: &str,
+        edit: Option<Edit>,
+        said: fn(&str) -> String,
+        nothing: &'static str,
     ) {
-        if self.change(change) {
-            // Said last, since what was done matters more than what came of it.
-            self.say(named.unwrap_or_default());
-        } else {
-            self.say(nothing.to_owned());
+        // Said last, since what was done matters more than what came of it.
+        match edit {
+            Some(edit) if self.change(change) => {
+                self.say(said(&self.peek(|document| names::edit(&edit, document))));
+            }
+            _ => self.say(nothing.to_owned()),
         }
     }
 

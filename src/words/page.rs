@@ -45,6 +45,7 @@ texts! {
     // The sheet and its parts.
     untitled = "Untitled sheet";
     the_panel = "Panel";
+    a_row = "a row";
     heading_title = "Title block";
     heading_supply = "Supply";
     heading_feeders = "Feeders";
