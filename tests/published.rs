@@ -284,3 +284,30 @@ fn assert_fails(row: &Row, naming: &str) {
         other => panic!("{row:?} does not fail: {other:?}"),
     }
 }
+
+#[test]
+fn every_topic_and_key_is_described() {
+    let guide = include_str!("../DEVELOPERS.md");
+    for topic in all() {
+        let section = match topic.work {
+            Work::Now(_) => guide
+                .split(&format!("**{}**", topic.name))
+                .nth(1)
+                .and_then(|rest| rest.split("\n**").next()),
+            Work::Later => guide.split(&format!("- {}: ", topic.name)).nth(1),
+        };
+        let Some(section) = section else {
+            panic!("{} is not described", topic.name);
+        };
+        for key in topic.inputs.iter().chain(topic.expected) {
+            let is_described = [format!("`{}`", key.stem), format!("`{}_", key.stem)]
+                .iter()
+                .any(|written| section.contains(written));
+            assert!(
+                is_described,
+                "{}: {} is not described",
+                topic.name, key.stem
+            );
+        }
+    }
+}

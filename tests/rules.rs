@@ -15,13 +15,13 @@ use std::collections::BTreeSet;
 use std::sync::Arc;
 use ventrail::assume::AssumedValue;
 use ventrail::quantity::{
-    Current, Frequency, Inductance, Length, Ratio, Temperature, Unit, Voltage, WireSize,
+    CrossSection, Current, Frequency, Inductance, Length, Ratio, Temperature, Unit, Voltage,
+    WireSize,
 };
 use ventrail::sheet::{Choice, Entry, Item, Measured, Record, Sheet};
 use ventrail::sizing::conductor::{
     ConductorChoice, Conductors, DecidedBy, RunInput, Surrounding, Terminal, demand_of, size_run,
 };
-use ventrail::sizing::grounding::grown_by_ratio;
 use ventrail::sizing::rules;
 use ventrail::tables::{Column, Conduit, Metal};
 use ventrail::work::{LedgerGroup, TotalKind, Verdict, Worked, WorkedFeeder, work_out};
@@ -793,6 +793,15 @@ fn the_disconnect_has_115_per_cent_of_the_drives_input() {
 
 // --- grounding conductors -------------------------------------------------------------------------------------------
 
+/// The figure which was put into `figure` under `symbol`.
+fn term_figure(figure: &Figure, symbol: &str) -> Arc<Figure> {
+    let term = figure.terms.iter().find(|term| term.symbol == symbol);
+    match &term.unwrap().origin {
+        Origin::Figure(below) => Arc::clone(below),
+        other => panic!("{symbol} is no figure but {other:?}"),
+    }
+}
+
 /// A 20 hp feeder of 28 A input, held to a 40 A device: 1.25 x 28 A = 35 A, inside at 60 °C 8 AWG (40 A).
 fn forty_ampere_feeder(more: &[(Field, Entry)]) -> Arc<WorkedFeeder> {
     let mut entries = vec![
@@ -825,10 +834,11 @@ fn a_grounding_conductor_grows_with_phases_enlarged_by_choice_by_the_unrounded_r
     let ahead = enlarged.ahead.as_ref().unwrap();
     assert_eq!(ahead.smallest(), Some(WireSize::Awg8));
     assert_eq!(grounding(ahead), Some(WireSize::Awg8));
-    let (ratio, area, size) = grown_by_ratio(WireSize::Awg10, WireSize::Awg8, WireSize::Awg6);
-    assert_near(ratio.to_one(), 1.589_340);
+    let area = term_figure(ahead.grounding.as_ref().unwrap(), "A_g");
+    let ratio = term_figure(&area, "r");
+    assert_near(ratio.quantity::<Ratio>().unwrap().to_one(), 1.589_340);
+    let area = area.quantity::<CrossSection>().unwrap();
     assert_near(area.to_circular_mils(), 16_497.3);
-    assert_eq!(size, Some(WireSize::Awg8));
 }
 
 #[test]
@@ -1017,6 +1027,23 @@ fn the_main_device_keeps_the_branches_under_the_drives_own_limit() {
     let main = worked.incoming.main.as_ref().unwrap();
     assert_near(si(&main.sum), 141.0);
     assert_amperes(&main.rating, 125.0);
+}
+
+#[test]
+fn a_drive_which_permits_no_device_of_the_mains_type_counts_among_the_others() {
+    // A 0.5 hp drive with fuses of 6 A at most: no breaker is so small. Its motor's 1.1 A runs all the same:
+    // 150 + 27 + 14 + 1.1 = 192.1 A, and by the drives' inputs 150 + 26 + 13 + 1.5 = 190.5 A.
+    let [first, second, third] = three_drives();
+    let small = vec![
+        (Field::MotorPower, horsepower(0.5)),
+        (Field::DriveInput, amperes(1.5)),
+        (Field::LargestPermitted, amperes(6.0)),
+    ];
+    let worked = panel_of(&[], &[small, first, second, third]);
+    let main = worked.incoming.main.as_ref().unwrap();
+    assert_near(si(&main.sum), 192.1);
+    assert_near(si(&main.sum_by_inputs), 190.5);
+    assert_amperes(&main.rating, 175.0);
 }
 
 #[test]

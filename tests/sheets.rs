@@ -307,3 +307,32 @@ fn check_finite(name: &str, rule: &str, amount: Amount) {
         assert!(si.is_finite(), "{name}: {rule} gives {si}");
     }
 }
+
+#[test]
+fn every_member_of_the_summary_is_described() {
+    let guide = include_str!("../DEVELOPERS.md");
+    let mut names = BTreeSet::new();
+    for name in SHEETS {
+        gather_names(&summary_of(&document_of(name)), &mut names);
+    }
+    assert!(names.len() > 100, "{names:?}");
+    for name in names {
+        assert!(
+            guide.contains(&format!("`{name}`")),
+            "{name} is not described"
+        );
+    }
+}
+
+fn gather_names(json: &Value, names: &mut BTreeSet<String>) {
+    match json {
+        Value::Object(members) => {
+            names.extend(members.keys().cloned());
+            members
+                .values()
+                .for_each(|member| gather_names(member, names));
+        }
+        Value::Array(items) => items.iter().for_each(|item| gather_names(item, names)),
+        _ => {}
+    }
+}

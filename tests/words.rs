@@ -772,6 +772,22 @@ fn every_note() -> Vec<NoteKind> {
             table: MemoryTable::InsideAmpacity,
             rows: vec!["4 AWG".to_owned(), "6 AWG".to_owned()],
         },
+        NoteKind::TableFromMemory {
+            table: MemoryTable::FieldAmpacity,
+            rows: vec!["1500".to_owned()],
+        },
+        NoteKind::TableFromMemory {
+            table: MemoryTable::FaultConstants,
+            rows: vec!["10".to_owned()],
+        },
+        NoteKind::TableFromMemory {
+            table: MemoryTable::BreakerLoss,
+            rows: vec!["30".to_owned()],
+        },
+        NoteKind::TableFromMemory {
+            table: MemoryTable::FuseLoss,
+            rows: vec!["60".to_owned()],
+        },
         NoteKind::StandingBy { tags: tags() },
         NoteKind::ImpedanceAssumed {
             assumed: Ratio::per_cent(5.75),
@@ -829,7 +845,10 @@ fn every_note() -> Vec<NoteKind> {
 fn ids_of_all_kinds() -> BTreeSet<&'static str> {
     include_str!("../src/working/notes.rs")
         .lines()
-        .filter(|line| line.trim_start().starts_with("NoteKind::"))
+        .filter(|line| {
+            let line = line.trim_start();
+            line.starts_with("NoteKind::") || line.starts_with("MemoryTable::")
+        })
         .filter_map(|line| line.split('"').nth(1))
         .collect()
 }

@@ -2,7 +2,7 @@
 
 use crate::math::power;
 use crate::quantity::{
-    AirFlow, Density, HeatConductance, Length, Power, Pressure, Ratio, SpecificHeat, Temperature,
+    AirFlow, Density, HeatConductance, Length, Power, Pressure, SpecificHeat, Temperature,
     TemperatureDifference,
 };
 
@@ -87,9 +87,4 @@ pub fn airflow_by_us_rule(heat: Power, rise: TemperatureDifference) -> AirFlow {
 /// Constant C of the rule V = C * P / dT for air of a density: C = 1 / (rho * cp), cubic metres a second for W/K.
 pub fn airflow_constant(density: Density, specific_heat: SpecificHeat) -> f64 {
     1.0 / (density.to_kilograms_per_cubic_metre() * specific_heat.to_joules_per_kilogram_kelvin())
-}
-
-/// Ratio of two densities, as fans at altitude are corrected by it.
-pub fn density_ratio(density: Density, reference: Density) -> Ratio {
-    Ratio::of_one(density.to_kilograms_per_cubic_metre() / reference.to_kilograms_per_cubic_metre())
 }

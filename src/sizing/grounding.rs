@@ -89,14 +89,3 @@ fn grown_area(
     );
     Some((Arc::new(grown), wanted))
 }
-
-/// The area of a grounding conductor grown from one size by the ratio of two others: used by checks of 250.122(B).
-pub fn grown_by_ratio(
-    by_table: WireSize,
-    from: WireSize,
-    to: WireSize,
-) -> (Ratio, CrossSection, Option<WireSize>) {
-    let ratio = area(to) / area(from);
-    let wanted = ratio * area(by_table);
-    (ratio, wanted, size_of_area(wanted).map(|size| size.min(to)))
-}

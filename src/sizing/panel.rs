@@ -220,9 +220,10 @@ fn main_device(
         .collect();
     let largest = position_of_largest_branch(&branches)?;
     let first = branches.get(largest)?;
+    let (rating, rating_figure) = first.rating.as_ref()?;
     let branch_figure = Arc::new(rules::BRANCH_FOR_MAIN.figure(
-        first.rating,
-        [Term::of("I_n", &first.figure).belonging_to(first.tag)],
+        *rating,
+        [Term::of("I_n", rating_figure).belonging_to(first.tag)],
     ));
     let sum_with = |current_of: fn(&Branch<'_>) -> Term| {
         let parts = branches
@@ -238,7 +239,7 @@ fn main_device(
             )
             .collect();
         let others = sum_of(&rules::OTHER_MOTORS, parts);
-        let total = first.rating + others.quantity().unwrap_or(Current::amperes(0.0));
+        let total = *rating + others.quantity().unwrap_or(Current::amperes(0.0));
         Arc::new(rules::MAIN_SUM.figure(
             total,
             [Term::of("I_b", &branch_figure), Term::of("I_o", &others)],
@@ -261,38 +262,40 @@ struct Branch<'a> {
     tag: &'a Arc<str>,
     motor_current: &'a Given<Current>,
     drive_input: &'a Given<Current>,
-    rating: Current,
-    figure: Arc<Figure>,
+    /// The largest device of the main's type which its drive may have; `None` where there is no such device, so that it
+    /// counts among the others alone.
+    rating: Option<(Current, Arc<Figure>)>,
 }
 
 impl<'a> Branch<'a> {
     fn of(load: &'a FeederLoad, input: &IncomingInput) -> Option<Self> {
         let branch = load.branch.as_ref()?;
-        let (rating, figure) = branch_for_main(input.main.value, branch, input.edition)?;
         Some(Self {
             tag: &load.tag,
             motor_current: &branch.motor_current,
             drive_input: &load.drive_input,
-            rating,
-            figure,
+            rating: branch_for_main(input.main.value, branch, input.edition),
         })
     }
 }
 
 /// Equal largest devices: the one with the larger motor current counts as the largest.
 fn position_of_largest_branch(branches: &[Branch<'_>]) -> Option<usize> {
-    let mut found: Option<(usize, &Branch<'_>)> = None;
+    let mut found: Option<(usize, Current, Current)> = None;
     for (position, branch) in branches.iter().enumerate() {
-        let is_larger = found.is_none_or(|(_, largest)| {
-            branch.rating > largest.rating
-                || (agree(branch.rating.to_amperes(), largest.rating.to_amperes())
-                    && branch.motor_current.value > largest.motor_current.value)
+        let Some((rating, _)) = branch.rating else {
+            continue;
+        };
+        let motor = branch.motor_current.value;
+        let is_larger = found.is_none_or(|(_, largest, its_motor)| {
+            rating > largest
+                || (agree(rating.to_amperes(), largest.to_amperes()) && motor > its_motor)
         });
         if is_larger {
-            found = Some((position, branch));
+            found = Some((position, rating, motor));
         }
     }
-    found.map(|(position, _)| position)
+    found.map(|(position, _, _)| position)
 }
 
 fn main_rating(

@@ -5,7 +5,7 @@ use crate::assume::{AssumedValue, Assumption, FeederInputs, Site, feeder as fill
 use crate::math::reaches;
 use crate::quantity::{Current, Power, Ratio, Temperature, Voltage};
 use crate::sheet::Item;
-use crate::sizing::conductor::{Conductors, Demand, Surrounding, demand_of, size_run};
+use crate::sizing::conductor::{Conductors, Demand, demand_of, size_run};
 use crate::sizing::current::{DriveInputBasis, drive_input, motor_full_load};
 use crate::sizing::device::{Device, DeviceInput, disconnect, size_branch_device};
 use crate::sizing::grounding::grounding_of;
@@ -389,13 +389,6 @@ impl WorkedFeeder {
     /// The runs of the feeder which were worked.
     pub fn runs(&self) -> impl Iterator<Item = &Conductors> {
         [&self.ahead, &self.behind].into_iter().flatten()
-    }
-
-    /// Whether conductors of this feeder rest on the inside table.
-    pub(super) fn inside_sizes(&self) -> impl Iterator<Item = crate::quantity::WireSize> + '_ {
-        self.runs()
-            .filter(|conductors| matches!(conductors.input.surrounding, Surrounding::Inside { .. }))
-            .filter_map(Conductors::installed)
     }
 
     /// The heat of everything of this feeder inside.

@@ -5,14 +5,15 @@ use super::feeder::Feeder;
 use super::panel::tag_of;
 use crate::assume::SheetInputs;
 use crate::math::reaches;
-use crate::quantity::{Current, Ratio, Temperature, WireSize};
+use crate::quantity::{Current, Ratio, Temperature};
 use crate::sheet::{Item, Sheet};
-use crate::sizing::conductor::cells_from_memory;
+use crate::sizing::conductor::{Conductors, cells_from_memory};
 use crate::sizing::panel::IncomingCircuit;
 use crate::tables::DeviceType;
 use crate::tables::device_losses::{breaker_pole, fuse_link};
+use crate::tables::nec_chapter_9::area;
 use crate::working::{
-    Field, Given, Grade, Holder, MarginNote, MemoryTable, NoteKind, Run, RunField,
+    Field, Given, Grade, Holder, MarginNote, MemoryTable, NoteKind, Place, RunField,
 };
 use std::collections::BTreeMap;
 use std::sync::Arc;
@@ -32,14 +33,6 @@ pub(super) fn note_sheet(
             NoteKind::SupplyVoltageMissing,
         );
     }
-    let standing_by = tags(feeders, |feeder| !feeder.worked.is_running);
-    if !standing_by.is_empty() {
-        tell(
-            Grade::Note,
-            Field::Running,
-            NoteKind::StandingBy { tags: standing_by },
-        );
-    }
     let has_load = |feeder: &Feeder| {
         feeder.worked.motor_current.is_some() || feeder.worked.drive_input.is_some()
     };
@@ -57,7 +50,7 @@ pub(super) fn note_sheet(
             NoteKind::MainIncomplete { tags: uncounted },
         );
     }
-    let without_heat = tags(feeders, |feeder| {
+    let is_without_heat = |feeder: &Feeder| {
         let heat = &feeder.worked.heat;
         let has_reactor = feeder
             .inputs
@@ -68,14 +61,7 @@ pub(super) fn note_sheet(
             && (heat.drive.is_none()
                 || heat.device.is_none()
                 || (has_reactor && heat.reactor.is_none()))
-    });
-    if !without_heat.is_empty() {
-        tell(
-            Grade::Query,
-            Field::DriveLoss,
-            NoteKind::LedgerIncomplete { tags: without_heat },
-        );
-    }
+    };
     let drives = u32::try_from(
         feeders
             .iter()
@@ -86,12 +72,36 @@ pub(super) fn note_sheet(
     if drives > 1 {
         tell(
             Grade::Note,
-            Field::ReactorPercent,
+            Field::SupplyVoltage,
             NoteKind::SeveralDrives { drives },
         );
     }
+    notes.extend(at_first(
+        feeders,
+        |feeder| !feeder.worked.is_running,
+        (Grade::Note, Field::Running),
+        |tags| NoteKind::StandingBy { tags },
+    ));
+    notes.extend(at_first(
+        feeders,
+        is_without_heat,
+        (Grade::Query, Field::DriveLoss),
+        |tags| NoteKind::LedgerIncomplete { tags },
+    ));
     notes.extend(repeated_tags(feeders));
     notes.extend(memory_notes(inputs, feeders, incoming));
+}
+
+/// One note about several feeders, at the first of them; `None` where there are none.
+fn at_first(
+    feeders: &[Feeder],
+    wanted: impl Fn(&Feeder) -> bool,
+    (grade, field): (Grade, Field),
+    kind: impl FnOnce(Vec<String>) -> NoteKind,
+) -> Option<MarginNote> {
+    let first = feeders.iter().find(|feeder| wanted(feeder))?;
+    let note = MarginNote::new(grade, field, kind(tags(feeders, wanted)));
+    Some(note.held_by(Holder::Feeder(first.worked.id)))
 }
 
 fn tags(feeders: &[Feeder], wanted: impl Fn(&Feeder) -> bool) -> Vec<String> {
@@ -121,92 +131,113 @@ fn repeated_tags(feeders: &[Feeder]) -> Vec<MarginNote> {
     notes
 }
 
+/// A row of a table known from memory, and the place where it first took part.
+struct RowFromMemory {
+    table: MemoryTable,
+    row: String,
+    /// Rows are named in this order, smallest first.
+    order: f64,
+    place: Place,
+}
+
 /// One `query` for each table some cells of which are known from memory, naming the rows which took part.
 fn memory_notes(
     inputs: &SheetInputs,
     feeders: &[Feeder],
     incoming: &IncomingCircuit,
 ) -> Vec<MarginNote> {
-    let mut notes = Vec::new();
-    let mut inside: Vec<_> = feeders
+    let of_feeders = feeders.iter().flat_map(rows_of_feeder);
+    let of_panel = incoming
+        .conductors
         .iter()
-        .flat_map(|feeder| feeder.worked.inside_sizes())
-        .collect();
-    inside.sort_unstable();
-    inside.dedup();
-    let mut field: Vec<_> = feeders
-        .iter()
-        .flat_map(|feeder| feeder.worked.runs())
-        .chain(&incoming.conductors)
-        .filter_map(cells_from_memory)
-        .filter(|(is_inside, _)| !is_inside)
-        .map(|(_, size)| size)
-        .collect();
-    field.sort_unstable();
-    field.dedup();
-    let numbers =
-        |sizes: Vec<WireSize>| sizes.iter().map(|size| size.number().to_owned()).collect();
-    let mut tell = |table, rows: Vec<String>, place| {
-        if !rows.is_empty() {
-            notes.push(MarginNote::new(
-                Grade::Query,
-                place,
-                NoteKind::TableFromMemory { table, rows },
-            ));
-        }
-    };
-    tell(
+        .filter_map(|conductors| ampacity_row_of(conductors, Holder::Sheet))
+        .chain(main_row(inputs, incoming));
+    let rows: Vec<RowFromMemory> = of_feeders.chain(of_panel).collect();
+    [
         MemoryTable::InsideAmpacity,
-        numbers(inside),
-        Field::Run(Run::Ahead, RunField::Size),
-    );
-    tell(
         MemoryTable::FieldAmpacity,
-        numbers(field),
-        Field::Run(Run::Behind, RunField::Size),
-    );
-    let (breakers, fuses) = assumed_device_ratings(inputs, feeders, incoming);
-    tell(MemoryTable::BreakerLoss, breakers, Field::DeviceLoss);
-    tell(MemoryTable::FuseLoss, fuses, Field::DeviceLoss);
-    notes
+        MemoryTable::BreakerLoss,
+        MemoryTable::FuseLoss,
+    ]
+    .into_iter()
+    .filter_map(|table| memory_note(table, &rows))
+    .collect()
 }
 
-/// Ratings of breakers and of fuses whose loss was assumed from a limit.
-fn assumed_device_ratings(
-    inputs: &SheetInputs,
-    feeders: &[Feeder],
-    incoming: &IncomingCircuit,
-) -> (Vec<String>, Vec<String>) {
-    let of_feeders = feeders.iter().filter_map(|feeder| {
-        let loss = feeder.worked.heat.device.as_ref()?;
-        let device = feeder.worked.device.as_ref()?;
-        (!loss.is_entered()).then_some((device.device.value, device.rating.as_ref()?.value))
-    });
-    let of_main = incoming
-        .main
-        .as_ref()
-        .filter(|_| inputs.main_loss.is_none())
-        .and_then(|main| Some((inputs.main.value, main.rating.as_ref()?.value)))
-        .filter(|(device, rating)| match device {
-            DeviceType::InverseTimeBreaker => breaker_pole(*rating).is_some(),
-            _ => fuse_link(*rating).is_some(),
-        });
-    let mut ratings: Vec<(DeviceType, Current)> = of_feeders.chain(of_main).collect();
-    ratings.sort_by(|a, b| a.1.to_amperes().total_cmp(&b.1.to_amperes()));
-    ratings.dedup();
-    let named = |wanted: fn(DeviceType) -> bool| {
-        let mut names: Vec<String> = ratings
-            .iter()
-            .filter(|(device, _)| wanted(*device))
-            .map(|(_, rating)| format!("{}", rating.to_amperes()))
-            .collect();
-        names.dedup();
-        names
+fn memory_note(table: MemoryTable, rows: &[RowFromMemory]) -> Option<MarginNote> {
+    let mut of_table: Vec<&RowFromMemory> = rows.iter().filter(|row| row.table == table).collect();
+    let first = *of_table.first()?;
+    of_table.sort_by(|a, b| a.order.total_cmp(&b.order));
+    of_table.dedup_by(|a, b| a.row == b.row);
+    let names = of_table.iter().map(|row| row.row.clone()).collect();
+    let kind = NoteKind::TableFromMemory { table, rows: names };
+    Some(MarginNote::new(Grade::Query, first.place.field, kind).held_by(first.place.holder))
+}
+
+fn rows_of_feeder(feeder: &Feeder) -> impl Iterator<Item = RowFromMemory> + '_ {
+    let holder = Holder::Feeder(feeder.worked.id);
+    feeder
+        .worked
+        .runs()
+        .filter_map(move |conductors| ampacity_row_of(conductors, holder))
+        .chain(device_row(feeder, holder))
+}
+
+fn ampacity_row_of(conductors: &Conductors, holder: Holder) -> Option<RowFromMemory> {
+    let (is_inside, size) = cells_from_memory(conductors)?;
+    let table = if is_inside {
+        MemoryTable::InsideAmpacity
+    } else {
+        MemoryTable::FieldAmpacity
     };
-    (
-        named(|device| device == DeviceType::InverseTimeBreaker),
-        named(|device| device != DeviceType::InverseTimeBreaker),
-    )
+    Some(RowFromMemory {
+        table,
+        row: size.number().to_owned(),
+        order: area(size).to_circular_mils(),
+        place: Place {
+            holder,
+            field: Field::Run(conductors.input.run, RunField::Size),
+        },
+    })
+}
+
+/// The row by which the loss of a branch device was assumed.
+fn device_row(feeder: &Feeder, holder: Holder) -> Option<RowFromMemory> {
+    let loss = feeder.worked.heat.device.as_ref()?;
+    let device = feeder.worked.device.as_ref()?;
+    let rating = device.rating.as_ref()?.value;
+    let place = Place {
+        holder,
+        field: Field::DeviceLoss,
+    };
+    (!loss.is_entered()).then(|| loss_row(device.device.value, rating, place))
+}
+
+/// The row by which the loss of the main device was assumed.
+fn main_row(inputs: &SheetInputs, incoming: &IncomingCircuit) -> Option<RowFromMemory> {
+    let rating = incoming.main.as_ref()?.rating.as_ref()?.value;
+    let device = inputs.main.value;
+    let is_in_table = match device {
+        DeviceType::InverseTimeBreaker => breaker_pole(rating).is_some(),
+        _ => fuse_link(rating).is_some(),
+    };
+    let place = Place {
+        holder: Holder::Sheet,
+        field: Field::MainLoss,
+    };
+    (is_in_table && inputs.main_loss.is_none()).then(|| loss_row(device, rating, place))
+}
+
+fn loss_row(device: DeviceType, rating: Current, place: Place) -> RowFromMemory {
+    RowFromMemory {
+        table: match device {
+            DeviceType::InverseTimeBreaker => MemoryTable::BreakerLoss,
+            _ => MemoryTable::FuseLoss,
+        },
+        row: format!("{}", rating.to_amperes()),
+        order: rating.to_amperes(),
+        place,
+    }
 }
 
 /// Drives which stand in hotter air or higher than their full current allows: a `query` until derating is worked.
@@ -260,36 +291,6 @@ fn governing_air(
     } else {
         inside
     }
-}
-
-/// Several queries about one table become one which names all rows.
-pub(super) fn merge_memory_notes(notes: Vec<MarginNote>) -> Vec<MarginNote> {
-    let mut merged: Vec<MarginNote> = Vec::with_capacity(notes.len());
-    for note in notes {
-        let NoteKind::TableFromMemory { table, rows } = &note.kind else {
-            merged.push(note);
-            continue;
-        };
-        let earlier = merged
-            .iter_mut()
-            .find_map(|earlier| match &mut earlier.kind {
-                NoteKind::TableFromMemory {
-                    table: its_table,
-                    rows: its_rows,
-                } if its_table == table => Some(its_rows),
-                _ => None,
-            });
-        match earlier {
-            Some(its_rows) => its_rows.extend(
-                rows.iter()
-                    .filter(|row| !its_rows.contains(row))
-                    .cloned()
-                    .collect::<Vec<_>>(),
-            ),
-            None => merged.push(note),
-        }
-    }
-    merged
 }
 
 /// Stops first; within a grade the sheet's own notes, then the feeders' in their order, then the sources'.

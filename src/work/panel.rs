@@ -180,19 +180,21 @@ pub(super) fn ratings_of(
     if let (Some((rating, holders)), Some(fault)) = (&lowest, &fault.at_panel)
         && *rating < fault.value
     {
-        let tags = holders.iter().filter_map(|holder| match holder {
+        let lowest = holders.iter().filter_map(|holder| match holder {
             Holder::Feeder(id) => feeders.iter().find(|feeder| feeder.worked.id == *id),
             _ => None,
         });
-        notes.push(MarginNote::new(
-            Grade::Stop,
-            Field::MainShortCircuitRating,
-            NoteKind::FaultAboveRating {
-                fault: fault.value,
-                rating: *rating,
-                lowest: tags.map(|feeder| tag_of(&feeder.worked)).collect(),
-            },
-        ));
+        let kind = NoteKind::FaultAboveRating {
+            fault: fault.value,
+            rating: *rating,
+            lowest: lowest.map(|feeder| tag_of(&feeder.worked)).collect(),
+        };
+        let holder = holders.first().copied().unwrap_or(Holder::Sheet);
+        let field = match holder {
+            Holder::Feeder(_) => Field::ShortCircuitRating,
+            _ => Field::MainShortCircuitRating,
+        };
+        notes.push(MarginNote::new(Grade::Stop, field, kind).held_by(holder));
     }
     Ratings {
         lowest,

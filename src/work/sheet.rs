@@ -3,7 +3,7 @@
 use super::enclosure::{band_edges, band_of, enclosure_of, note_enclosure};
 use super::feeder::{Feeder, assumed_by_rule, work_feeder};
 use super::ledger::ledger_of;
-use super::notes::{in_order, merge_memory_notes, note_drives, note_sheet};
+use super::notes::{in_order, note_drives, note_sheet};
 use super::panel::{fault_of, incoming_of, main_loss, ratings_of};
 use super::totals::{Findings, totals_of};
 use super::{Ledger, Worked, WorkedEnclosure, WorkedSource};
@@ -139,7 +139,7 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
         enclosure: settled.enclosure,
         totals,
         assumptions,
-        notes: in_order(merge_memory_notes(notes), sheet),
+        notes: in_order(notes, sheet),
         memory: Memory {
             site: Some(Arc::new(inputs.site)),
             feeders: sheet
