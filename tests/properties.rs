@@ -397,10 +397,10 @@ proptest! {
     #![proptest_config(cases(70))]
 
     #[test]
-    fn every_finding_is_at_a_holder_which_exists_and_stops_come_first(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
+    fn every_finding_is_at_a_place_which_exists_and_stops_come_first(sheet in prop_oneof![any_sheet().boxed(), ordinary_sheet().boxed()]) {
         let worked = work_out(&sheet);
         for note in &worked.notes {
-            prop_assert!(sheet.record(note.place.holder).is_some(), "{note:?}");
+            prop_assert!(sheet.has(note.place), "{note:?}");
         }
         let grades: Vec<Grade> = worked.notes.iter().map(|note| note.grade).collect();
         prop_assert!(grades.is_sorted(), "{grades:?}");
