@@ -1047,23 +1047,6 @@ fn a_drive_which_permits_no_device_of_the_mains_type_counts_among_the_others() {
 }
 
 #[test]
-fn a_drive_which_permits_no_device_of_the_mains_type_counts_among_the_others() {
-    // A 0.5 hp drive with fuses of 6 A at most: no breaker is so small. Its motor's 1.1 A runs all the same:
-    // 150 + 27 + 14 + 1.1 = 192.1 A, and by the drives' inputs 150 + 26 + 13 + 1.5 = 190.5 A.
-    let [first, second, third] = three_drives();
-    let small = vec![
-        (Field::MotorPower, horsepower(0.5)),
-        (Field::DriveInput, amperes(1.5)),
-        (Field::LargestPermitted, amperes(6.0)),
-    ];
-    let worked = panel_of(&[], &[small, first, second, third]);
-    let main = worked.incoming.main.as_ref().unwrap();
-    assert_near(si(&main.sum), 192.1);
-    assert_near(si(&main.sum_by_inputs), 190.5);
-    assert_amperes(&main.rating, 175.0);
-}
-
-#[test]
 fn of_equal_largest_devices_the_one_with_the_larger_motor_counts_as_the_largest() {
     // As breakers both are 70 A: 2.5 x 27 = 67.5 A and 2.5 x 26 = 65 A. 70 + 26 = 96 A, not 70 + 27; rounded down 90 A.
     let twins = |currents: [f64; 2]| {
