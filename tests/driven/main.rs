@@ -4,7 +4,13 @@
 //! the module `harness`. A scenario belongs into the module of what it is about, one file each beside this one.
 
 mod harness;
+mod sheet;
 
+mod exchanging;
 mod handling;
+mod keeping;
+mod listing;
 mod notices;
 mod opening;
+mod printing;
+mod reading;
