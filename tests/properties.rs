@@ -485,13 +485,14 @@ fn is_stop_of(note: &MarginNote, total: &Total) -> bool {
         | (TotalKind::Airflow, NoteKind::AirflowShort { .. })
         | (TotalKind::MainDevice, NoteKind::MainAboveMaximum { .. })
         | (TotalKind::FaultCurrent, NoteKind::FaultAboveRating { .. }) => true,
-        (TotalKind::IncomingCurrent, NoteKind::ConductorTooSmall { run, .. }) => {
-            *run == Run::Incoming
-        }
-        // Where no size fits and none is entered, there is no limit to be beyond.
-        (TotalKind::IncomingCurrent, NoteKind::NoConductorFits { run, .. }) => {
-            *run == Run::Incoming && total.limit.is_some()
-        }
+        // No ampacity at all carries nothing.
+        (
+            TotalKind::IncomingCurrent,
+            NoteKind::ConductorTooSmall { run, .. }
+            | NoteKind::NoConductorFits { run, .. }
+            | NoteKind::AmbientBeyondInsulation { run, .. }
+            | NoteKind::SizeNotInTable { run, .. },
+        ) => *run == Run::Incoming,
         _ => false,
     };
     is_it && note.grade == Grade::Stop

@@ -807,6 +807,8 @@ fn every_note() -> Vec<NoteKind> {
             tags: tags(),
             main_too: true,
         },
+        NoteKind::NoBranchForMain,
+        NoteKind::ReactorLossUnused,
         NoteKind::NoMainFits { sum: amperes(8.0) },
         NoteKind::MainBelowRunning {
             rating: amperes(250.0),

@@ -5,7 +5,7 @@ use crate::physics::circuit::share_of;
 use crate::quantity::{Current, Ratio};
 use crate::sizing::rules;
 use crate::tables::nec_motors::largest_ratio;
-use crate::tables::nec_ratings::{LARGEST_CLASS_CC, at_or_above, at_or_below};
+use crate::tables::nec_ratings::{LARGEST_CLASS_CC, at_or_above, at_or_below, is_standard};
 use crate::tables::{DeviceType, Edition};
 use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, Term};
 use std::collections::BTreeSet;
@@ -241,9 +241,7 @@ fn installed(
         return largest.and_then(Given::from_figure);
     };
     let field = Field::DeviceRating;
-    let is_standard = at_or_above(entered.value, input.device.value, edition)
-        .is_some_and(|rating| agree(rating.to_amperes(), entered.value.to_amperes()));
-    if !is_standard {
+    if !is_standard(entered.value, input.device.value, edition) {
         notes.push(MarginNote::new(
             Grade::Query,
             field,
@@ -272,7 +270,8 @@ fn installed(
 }
 
 /// The branch device worked again for the type of the main device, under the drive's own limit: what a main device of
-/// that type may count. Source: NEC 2023, 430.62(A), 409.21(C).
+/// that type may count. A smaller rating which is entered for the branch counts as it is, the cautious reading of "the
+/// device provided". Source: NEC 2023, 430.62(A), 409.21(C).
 pub fn branch_for_main(
     main: DeviceType,
     branch: &DeviceInput,
@@ -289,7 +288,19 @@ pub fn branch_for_main(
         },
         ..branch.clone()
     };
-    held_by_drive(&as_main, by_rule, figure, edition, &mut unheard)
+    let (permitted, figure) = held_by_drive(&as_main, by_rule, figure, edition, &mut unheard)?;
+    let Some(entered) = branch
+        .rating
+        .as_ref()
+        .filter(|entered| entered.value < permitted)
+    else {
+        return Some((permitted, figure));
+    };
+    let provided = rules::BRANCH_PROVIDED.figure(
+        entered.value,
+        [entered.term("I_n"), Term::of("permitted", &figure)],
+    );
+    Some((entered.value, Arc::new(provided)))
 }
 
 /// Smallest rating of the disconnect of a drive: 115 per cent of its rated input current.

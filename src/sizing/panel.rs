@@ -5,7 +5,7 @@ use crate::quantity::{Current, Voltage};
 use crate::sizing::conductor::{CONTINUOUS, Conductors, Demand, RunInput, size_run};
 use crate::sizing::device::{DeviceInput, branch_for_main};
 use crate::sizing::rules;
-use crate::tables::nec_ratings::at_or_below;
+use crate::tables::nec_ratings::{at_or_below, is_standard};
 use crate::tables::{DeviceType, Edition};
 use crate::working::{Field, Figure, Given, Grade, MarginNote, NoteKind, Rule, Term, sum_of_terms};
 use std::sync::Arc;
@@ -220,7 +220,14 @@ fn main_device(
         .collect();
     let largest = position_of_largest_branch(&branches)?;
     let first = branches.get(largest)?;
-    let (rating, rating_figure) = first.rating.as_ref()?;
+    let Some((rating, rating_figure)) = first.rating.as_ref() else {
+        notes.push(MarginNote::new(
+            Grade::Stop,
+            Field::MainType,
+            NoteKind::NoBranchForMain,
+        ));
+        return None;
+    };
     let branch_figure = Arc::new(rules::BRANCH_FOR_MAIN.figure(
         *rating,
         [Term::of("I_n", rating_figure).belonging_to(first.tag)],
@@ -320,6 +327,17 @@ fn main_rating(
     }
     let largest_figure =
         largest.map(|rating| Arc::new(rules::MAIN_LARGEST.figure(rating, [Term::of("I_x", sum)])));
+    if let Some(entered) = &input.main_rating
+        && !is_standard(entered.value, input.main.value, input.edition)
+    {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            Field::MainRating,
+            NoteKind::DeviceNotStandard {
+                entered: entered.value,
+            },
+        ));
+    }
     if let (Some(entered), Some(most)) = (&input.main_rating, largest)
         && !reaches(most.to_amperes(), entered.value.to_amperes())
     {

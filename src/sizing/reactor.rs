@@ -123,6 +123,13 @@ pub fn reactor_of(
         .filter(|percent| percent.value > Ratio::of_one(0.0))
         .and_then(|percent| entered_size(percent, input, supply, notes));
     note_advice(input, advised_percent, &reasons, notes);
+    if input.loss.is_some() && entered.is_none() {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            Field::ReactorLoss,
+            NoteKind::ReactorLossUnused,
+        ));
+    }
     let is_answered = input
         .percent
         .as_ref()

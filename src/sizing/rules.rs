@@ -316,7 +316,7 @@ pub static DEVICE_STANDARD: Rule = Rule {
     form: Form::Lookup,
     source: &NEC,
     clause: "240.6(A), 430.52(C)(1) Exception 1",
-    known: Known::CrossChecked,
+    known: Known::Read,
 };
 
 /// Class CC fuses end at 30 A.
@@ -359,7 +359,7 @@ pub static GROUNDING_TABLE: Rule = Rule {
     form: Form::Lookup,
     source: &NEC,
     clause: "Table 250.122",
-    known: Known::CrossChecked,
+    known: Known::Read,
 };
 
 /// Area of a conductor.
@@ -618,6 +618,16 @@ pub static BRANCH_FOR_MAIN: Rule = Rule {
     form: Form::Choice,
     source: &NEC,
     clause: "430.62(A), 430.52(C)(1)",
+    known: Known::Read,
+};
+
+/// A branch device entered below what the rule permits.
+pub static BRANCH_PROVIDED: Rule = Rule {
+    id: "sizing.panel.branch_provided",
+    gives: "I_n",
+    form: Form::Choice,
+    source: &NEC,
+    clause: "409.21(C)",
     known: Known::Read,
 };
 
@@ -953,6 +963,7 @@ pub fn all() -> Vec<&'static Rule> {
         &OTHER_INPUTS,
         &OTHER_MOTORS,
         &BRANCH_FOR_MAIN,
+        &BRANCH_PROVIDED,
         &MAIN_SUM,
         &MAIN_LARGEST,
         &DRIVE_HEAT_ASSUMED,

@@ -1,7 +1,7 @@
 //! NEC 2023, 240.6(A): standard ampere ratings of fuses and inverse time breakers.
 
 use super::{DeviceType, Edition};
-use crate::math::reaches;
+use crate::math::{agree, reaches};
 use crate::quantity::Current;
 
 /// A standard rating, and for which devices it is one.
@@ -38,6 +38,12 @@ pub fn at_or_below(current: Current, device: DeviceType, edition: Edition) -> Op
     ratings(device, edition)
         .filter(|rating| reaches(current.to_amperes(), rating.to_amperes()))
         .last()
+}
+
+/// Whether `current` is a standard rating for `device`.
+pub fn is_standard(current: Current, device: DeviceType, edition: Edition) -> bool {
+    at_or_above(current, device, edition)
+        .is_some_and(|rating| agree(rating.to_amperes(), current.to_amperes()))
 }
 
 const fn row(amperes: f64, is_breaker_rating_2023: bool) -> StandardRating {

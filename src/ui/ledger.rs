@@ -61,11 +61,11 @@ pub(super) fn ledger(page: Page) -> AnyView {
     let advised = tag("TR")
         .hidden(move || figure::at(page, Spot::AdvisedReactors) == Shown::Nothing)
         .with(row_head(page::ledger_advised()))
-        .child(number(figure(
+        .child(bare_number(
             page,
             Spot::AdvisedReactors,
             page::ledger_advised(),
-        )))
+        ))
         .with(tag("TD"))
         .with(tag("TD"));
     tag("TABLE")
@@ -98,18 +98,18 @@ fn group_row(page: Page, group: LedgerGroup) -> AnyView {
 
 fn ledger_cell(page: Page, group: Option<LedgerGroup>, load: Load) -> AnyView {
     let name = group.map_or(page::head_total(), words::ledger_group);
-    number(figure::framed(
-        page,
-        Spot::Ledger(group, load),
-        name,
-        |page, spot| {
-            let system = page.system();
-            page.worked.with(|worked| match spot.traced(worked) {
-                Some(traced) => super::shown::bare(&traced, system),
-                None => Shown::Nothing,
-            })
-        },
-    ))
+    bare_number(page, Spot::Ledger(group, load), name)
+}
+
+/// A figure whose unit stands in the head of its column.
+fn bare_number(page: Page, spot: Spot, name: &str) -> AnyView {
+    number(figure::framed(page, spot, name, |page, spot| {
+        let system = page.system();
+        page.worked.with(|worked| match spot.traced(worked) {
+            Some(traced) => super::shown::bare(&traced, system),
+            None => Shown::Nothing,
+        })
+    }))
 }
 
 /// What runs together of a group, and everything connected of it, on the scale of the whole ledger. The browser does the
@@ -252,7 +252,7 @@ fn source_row(page: Page, id: HolderId) -> AnyView {
         );
     tag("TR")
         .children(cells)
-        .child(number(figure(page, Spot::Source(id), page::head_heat())))
+        .child(bare_number(page, Spot::Source(id), page::head_heat()))
         .with(tag("TD").with(delete))
         .done()
 }

@@ -127,7 +127,14 @@ fn total_view(page: Page, kind: TotalKind) -> AnyView {
         verdict.map_or_else(nothing, verdict_mark)
     });
     let name = words::total(kind);
+    let has_nothing = move || {
+        let nothing = total(page, kind, |total, _| {
+            total.running.is_none() && total.verdict == Verdict::NoLimit
+        });
+        nothing.unwrap_or(true)
+    };
     tag("TR")
+        .hidden(has_nothing)
         .with(
             tag("TH")
                 .set("scope", "row")

@@ -144,6 +144,8 @@ impl Spot {
         let figure = match self {
             Spot::Feeder(id, part) => return part.traced(feeder(worked, id)?),
             Spot::Panel(part) => return part.traced(worked),
+            // A sealed enclosure moves no air.
+            Spot::Air(_, part) if part.is_of_fans() && !worked.enclosure.is_ventilated => None,
             Spot::Air(load, part) => return part.traced(air(worked, load)),
             Spot::Ledger(None, Load::Running) => Some(Arc::clone(&worked.ledger.running)),
             Spot::Ledger(None, Load::Connected) => Some(Arc::clone(&worked.ledger.connected)),
@@ -447,6 +449,19 @@ impl AirPart {
             AirPart::AirflowUsRule => air.airflow_us_rule.as_ref(),
         };
         trace(figure)
+    }
+
+    /// Whether it is about the air which fans move.
+    const fn is_of_fans(self) -> bool {
+        matches!(
+            self,
+            AirPart::Pressure
+                | AirPart::Density
+                | AirPart::Airflow
+                | AirPart::AirflowCredited
+                | AirPart::AirflowMetricRule
+                | AirPart::AirflowUsRule
+        )
     }
 
     pub(super) const fn name(self) -> &'static str {

@@ -463,6 +463,16 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
                 "Enter the rating of each drive together with its device, and that of the main device.",
             )
         }
+        NoteKind::NoBranchForMain => said(
+            "No main device is worked.",
+            "No branch device could be worked for the type of the main device: a drive's instructions permit none of it (NEC 2023, 409.21(C)).",
+            "Choose another type for the main device, or see to the drives' largest permitted devices.",
+        ),
+        NoteKind::ReactorLossUnused => said(
+            "The reactor's loss is entered, but no reactor.",
+            "It counts nowhere until the reactor's percentage is entered too.",
+            "Enter the percentage, or clear the loss.",
+        ),
         NoteKind::NoMainFits { sum } => said(
             format!(
                 "No standard rating lies at or below {}.",

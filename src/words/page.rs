@@ -132,7 +132,7 @@ texts! {
     head_limit = "Limit";
     head_verdict = "Verdict";
     head_ground = "Ground";
-    head_of = "Of";
+    head_of = "For";
     head_field = "Field";
     head_value = "Value";
     head_reason = "Reason";
@@ -280,6 +280,8 @@ texts! {
     print_sheet = "Sheet";
     print_version = "Ventrail version";
     print_planning = "Planning figures, not an approval";
+    print_run_ahead = "Run ahead";
+    print_run_behind = "Run behind";
     print_conditions = "Conditions";
     print_review = "Review";
     print_prepared_by = "Prepared by";

@@ -65,6 +65,7 @@ pub fn rule_title(rule: &Rule) -> &'static str {
         "sizing.panel.other_inputs" => "Input currents of the other loads",
         "sizing.panel.other_motors" => "Full-load currents of the other motors and loads",
         "sizing.panel.branch_for_main" => "Largest branch device, for the type of the main device",
+        "sizing.panel.branch_provided" => "Branch device as entered, below what is permitted",
         "sizing.panel.main_sum" => "Largest branch device and the currents of the others",
         "sizing.panel.main_largest" => "Main device, the largest standard rating not above the sum",
         "physics.heat.drive_loss_by_motor" => "Heat of the drive, by motor power",

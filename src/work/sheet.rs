@@ -5,7 +5,7 @@ use super::feeder::{Feeder, assumed_by_rule, work_feeder};
 use super::ledger::ledger_of;
 use super::notes::{in_order, note_drives, note_sheet};
 use super::panel::{fault_of, incoming_of, main_loss, ratings_of};
-use super::totals::{Findings, totals_of};
+use super::totals::{Findings, Gaps, totals_of};
 use super::{Ledger, Worked, WorkedEnclosure, WorkedSource};
 use crate::assume::{SheetInputs, Site, SourceInputs, site, source};
 use crate::math::reaches;
@@ -33,6 +33,8 @@ pub fn work_again(sheet: &Sheet, before: &Worked) -> Worked {
 #[derive(Debug, Clone, Default)]
 pub(super) struct Memory {
     site: Option<Arc<Site>>,
+    /// The band of the air inside for which the feeders were worked.
+    air_band: Option<Temperature>,
     feeders: BTreeMap<u32, (Arc<Item>, Feeder)>,
 }
 
@@ -124,6 +126,7 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
         incoming: &settled.incoming,
         fault: &fault,
         ratings: &ratings,
+        gaps: Gaps::of(&notes),
     });
     Worked {
         feeders: settled
@@ -142,6 +145,7 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
         notes: in_order(notes, sheet),
         memory: Memory {
             site: Some(Arc::new(inputs.site)),
+            air_band: settled.feeders.first().and_then(|feeder| feeder.air_band),
             feeders: sheet
                 .feeders
                 .iter()
@@ -188,47 +192,70 @@ impl Settled {
 
 /// Solves the loop between the air inside and the sizes inside.
 ///
-/// Sizes, and so the heat, are the same for the whole of a band of air temperature, and hotter air never gives smaller
-/// wires: so the bands are tried from the coolest up, and the first one whose heat leads into it, or below it, is the
-/// solution. Where it leads below, no temperature fits exactly: the larger sizes and the warmer end, the edge between
-/// the two bands, are kept and said. Exact, with at most one turn for each band.
+/// Sizes, and so the heat, are the same for the whole of a band of air temperature, and hotter air never gives more heat:
+/// so the bands are tried from the coolest up, and the first one whose heat leads into it, or below it, is the solution.
+/// Where it leads below, no temperature fits exactly: the larger sizes and the warmer end, the edge between the two
+/// bands, are kept and said. Exact, with at most one turn for each band.
 fn settle(
     sheet: &Sheet,
     inputs: &SheetInputs,
     sources: &[WorkedSource],
     memory: &Memory,
 ) -> Settled {
+    let work = |band| work_for(sheet, inputs, sources, band, memory);
+    // A limit held by fans does not depend on the heat: its band is the solution.
+    if inputs.enclosure.is_ventilated {
+        return work(Some(band_of(inputs.enclosure.limit.value)));
+    }
+    if inputs.enclosure.measures.is_none() {
+        return work(None);
+    }
+    if let Some(settled) = settled_as_before(memory, &work) {
+        return settled;
+    }
     let mut cooler_edge = None;
     for edge in band_edges() {
-        let mut settled = work_for(sheet, inputs, sources, Some(edge), memory);
-        let Some(inside) = settled.inside() else {
-            return work_for(sheet, inputs, sources, None, memory);
-        };
-        if reaches(edge.to_kelvin(), inside.to_kelvin()) {
-            if let Some(cooler) = cooler_edge.filter(|cooler: &Temperature| inside < *cooler) {
-                keep_warmer_end(&mut settled, cooler);
-            }
+        let mut settled = work(Some(edge));
+        if settled
+            .inside()
+            .is_some_and(|inside| reaches(edge.to_kelvin(), inside.to_kelvin()))
+        {
+            keep_warmer_end(&mut settled, cooler_edge);
             return settled;
-        }
-        // A limit held by fans does not depend on the heat: its band is the solution.
-        if settled.enclosure.is_ventilated {
-            return work_for(sheet, inputs, sources, Some(band_of(inside)), memory);
         }
         cooler_edge = Some(edge);
     }
     // Hotter than the last band, where no insulation may be used: worked for that air itself. Without the heat of wires
     // the air may come out below the edge after all; then the edge is the warmer end.
-    let hottest = work_for(sheet, inputs, sources, band_edges().last(), memory);
-    let mut beyond = work_for(sheet, inputs, sources, hottest.inside(), memory);
-    if let (Some(edge), Some(inside)) = (cooler_edge, beyond.inside())
-        && inside < edge
-    {
-        keep_warmer_end(&mut beyond, edge);
-    }
+    let hottest = work(cooler_edge);
+    let mut beyond = work(hottest.inside());
+    keep_warmer_end(&mut beyond, cooler_edge);
     beyond
 }
 
-fn keep_warmer_end(settled: &mut Settled, edge: Temperature) {
+/// The band which held before, where it still leads into itself: since hotter air never gives more heat, no cooler band
+/// can hold then, and none needs to be tried.
+fn settled_as_before(
+    memory: &Memory,
+    work: &impl Fn(Option<Temperature>) -> Settled,
+) -> Option<Settled> {
+    let band = memory.air_band?;
+    let cooler = band_edges().take_while(|edge| *edge < band).last();
+    let is_a_band = band_edges().any(|edge| edge == band);
+    let settled = is_a_band.then(|| work(Some(band)))?;
+    let inside = settled.inside()?;
+    let is_within = reaches(band.to_kelvin(), inside.to_kelvin())
+        && cooler.is_none_or(|cooler| !reaches(cooler.to_kelvin(), inside.to_kelvin()));
+    is_within.then_some(settled)
+}
+
+/// Lifts the air to the edge of the next cooler band, where its own heat leads below it.
+fn keep_warmer_end(settled: &mut Settled, cooler_edge: Option<Temperature>) {
+    let Some(edge) =
+        cooler_edge.filter(|edge| settled.inside().is_some_and(|inside| inside < *edge))
+    else {
+        return;
+    };
     let air = &mut settled.enclosure.air;
     let exact = air.inside.as_ref().map(|inside| inside.term("by heat"));
     let mut terms: Vec<Term> = exact.into_iter().collect();

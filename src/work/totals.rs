@@ -8,7 +8,7 @@ use crate::quantity::{AirFlow, Current};
 use crate::sizing::air::Air;
 use crate::sizing::fault::Fault;
 use crate::sizing::panel::IncomingCircuit;
-use crate::working::{Amount, Figure, Origin};
+use crate::working::{Amount, Figure, MarginNote, NoteKind, Origin};
 use std::sync::Arc;
 
 /// Everything the totals are read from.
@@ -19,6 +19,40 @@ pub(super) struct Findings<'a> {
     pub(super) incoming: &'a IncomingCircuit,
     pub(super) fault: &'a Fault,
     pub(super) ratings: &'a Ratings,
+    pub(super) gaps: Gaps,
+}
+
+/// What is missing in the sums: a total over a gap is never found within its limit.
+#[derive(Debug, Clone, Copy)]
+pub(super) struct Gaps {
+    heat: bool,
+    currents: bool,
+}
+
+impl Gaps {
+    /// The gaps which were noted.
+    pub(super) fn of(notes: &[MarginNote]) -> Self {
+        let is_noted = |wanted: fn(&NoteKind) -> bool| notes.iter().any(|note| wanted(&note.kind));
+        Self {
+            heat: is_noted(|kind| {
+                matches!(
+                    kind,
+                    NoteKind::LedgerIncomplete { .. }
+                        | NoteKind::DeviceLossUnknown { .. }
+                        | NoteKind::SourceHeatUnknown
+                )
+            }),
+            currents: is_noted(|kind| matches!(kind, NoteKind::MainIncomplete { .. })),
+        }
+    }
+}
+
+/// A verdict on a sum: over a gap it cannot be said that it is within.
+fn over(has_gap: bool, verdict: Verdict) -> Verdict {
+    match verdict {
+        Verdict::Within if has_gap => Verdict::Unknown,
+        verdict => verdict,
+    }
 }
 
 /// All totals, in the order in which they are read.
@@ -78,7 +112,7 @@ fn inside_total(found: &Findings<'_>) -> Total {
             .as_ref()
             .and_then(|inside| figure_of(&inside.origin)),
         limit: Some(limit.into()),
-        verdict,
+        verdict: over(found.gaps.heat, verdict),
     }
 }
 
@@ -111,7 +145,7 @@ fn airflow_total(found: &Findings<'_>) -> Total {
         connected: amount_of(connected.as_ref()),
         figure: needed,
         limit: installed.map(|installed| installed.value.into()),
-        verdict,
+        verdict: over(found.gaps.heat, verdict),
     }
 }
 
@@ -134,6 +168,8 @@ fn current_total(found: &Findings<'_>) -> Total {
             Some(_) => Verdict::Beyond,
             None => Verdict::Unknown,
         },
+        // A stop says that no size fits.
+        (None, Some(_)) => Verdict::Beyond,
         _ => Verdict::Unknown,
     };
     Total {
@@ -142,7 +178,7 @@ fn current_total(found: &Findings<'_>) -> Total {
         connected: amount_of(found.incoming.connected.as_ref()),
         figure: found.incoming.running.clone(),
         limit: amount_of(carries.as_ref()),
-        verdict,
+        verdict: over(found.gaps.currents, verdict),
     }
 }
 
@@ -170,7 +206,7 @@ fn main_total(found: &Findings<'_>) -> Total {
         connected: None,
         figure: largest.clone(),
         limit: amount_of(largest.as_ref()),
-        verdict,
+        verdict: over(found.gaps.currents, verdict),
     }
 }
 

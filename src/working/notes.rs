@@ -180,6 +180,10 @@ pub enum NoteKind {
     },
     /// Parts without an entered short-circuit rating.
     RatingMissing { tags: Vec<String>, main_too: bool },
+    /// No branch device could be worked for the type of the main device.
+    NoBranchForMain,
+    /// A reactor's loss is entered, but no reactor.
+    ReactorLossUnused,
     /// No standard rating lies at or below the sum.
     NoMainFits { sum: Current },
     /// The main device, rounded down, is below the running current.
@@ -270,6 +274,8 @@ impl NoteKind {
             NoteKind::FaultConstantMissing { .. } => "fault-constant-missing",
             NoteKind::FaultAboveRating { .. } => "fault-above-rating",
             NoteKind::RatingMissing { .. } => "rating-missing",
+            NoteKind::NoBranchForMain => "no-branch-for-main",
+            NoteKind::ReactorLossUnused => "reactor-loss-unused",
             NoteKind::NoMainFits { .. } => "no-main-fits",
             NoteKind::MainBelowRunning { .. } => "main-below-running",
             NoteKind::MainAboveMaximum { .. } => "main-above-maximum",
