@@ -1030,6 +1030,71 @@ fn the_main_device_keeps_the_branches_under_the_drives_own_limit() {
 }
 
 #[test]
+fn a_branch_device_entered_below_what_is_permitted_counts_as_it_is() {
+    // The first branch is built with 60 A instead of 100 A: 60 + 27 + 14 = 101 A, so 100 A.
+    let mut drives = three_drives();
+    drives[0].push((Field::DeviceRating, amperes(60.0)));
+    let worked = panel_of(&[(Field::MainType, choice(Choice::TimeDelayFuse))], &drives);
+    let main = worked.incoming.main.as_ref().unwrap();
+    assert_near(si(&main.sum), 101.0);
+    assert_amperes(&main.rating, 100.0);
+}
+
+#[test]
+fn a_main_of_a_type_which_no_drive_permits_is_a_stop() {
+    let small = vec![
+        (Field::MotorPower, horsepower(0.5)),
+        (Field::DriveInput, amperes(1.5)),
+        (Field::LargestPermitted, amperes(6.0)),
+    ];
+    let worked = panel_of(&[], &[small]);
+    assert!(worked.incoming.main.is_none());
+    assert_eq!(
+        only_note(&worked.notes, "no-branch-for-main").grade,
+        Grade::Stop
+    );
+}
+
+#[test]
+fn a_main_rating_which_is_no_standard_rating_is_a_query() {
+    let worked = panel_of(&[(Field::MainRating, amperes(93.0))], &three_drives());
+    let note = only_note(&worked.notes, "device-not-standard");
+    assert_eq!(
+        (note.grade, note.place.field),
+        (Grade::Query, Field::MainRating)
+    );
+}
+
+#[test]
+fn a_total_over_a_motor_whose_drive_is_unknown_is_never_within() {
+    // A motor current alone gives no drive input: the sums are short of it.
+    let mut drives = three_drives().to_vec();
+    assert_eq!(
+        verdict(&panel_of(&[], &drives), TotalKind::IncomingCurrent),
+        Verdict::Within
+    );
+    drives.push(vec![(Field::MotorCurrent, amperes(10.0))]);
+    let worked = panel_of(&[], &drives);
+    only_note(&worked.notes, "main-incomplete");
+    for kind in [TotalKind::IncomingCurrent, TotalKind::MainDevice] {
+        assert_eq!(verdict(&worked, kind), Verdict::Unknown, "{kind:?}");
+    }
+}
+
+#[test]
+fn a_loss_entered_for_no_reactor_is_a_query_and_no_heat() {
+    let plain = feeder(&three_drives()[0]);
+    let mut entries = three_drives()[0].clone();
+    entries.push((Field::ReactorLoss, watts(80.0)));
+    let idle = feeder(&entries);
+    only_note(&idle.notes, "reactor-loss-unused");
+    assert_near(
+        si(idle.heat.total.as_ref().unwrap()),
+        si(plain.heat.total.as_ref().unwrap()),
+    );
+}
+
+#[test]
 fn a_drive_which_permits_no_device_of_the_mains_type_counts_among_the_others() {
     // A 0.5 hp drive with fuses of 6 A at most: no breaker is so small. Its motor's 1.1 A runs all the same:
     // 150 + 27 + 14 + 1.1 = 192.1 A, and by the drives' inputs 150 + 26 + 13 + 1.5 = 190.5 A.

@@ -218,14 +218,19 @@ fn main_device(
         .iter()
         .filter_map(|load| Branch::of(load, input))
         .collect();
-    let largest = position_of_largest_branch(&branches)?;
-    let first = branches.get(largest)?;
-    let Some((rating, rating_figure)) = first.rating.as_ref() else {
-        notes.push(MarginNote::new(
-            Grade::Stop,
-            Field::MainType,
-            NoteKind::NoBranchForMain,
-        ));
+    let largest = position_of_largest_branch(&branches);
+    let Some((largest, first, (rating, rating_figure))) = largest.and_then(|position| {
+        let branch = branches.get(position)?;
+        Some((position, branch, branch.rating.as_ref()?))
+    }) else {
+        // Without any motor there is nothing to protect, and the incoming sums say what they miss.
+        if !branches.is_empty() {
+            notes.push(MarginNote::new(
+                Grade::Stop,
+                Field::MainType,
+                NoteKind::NoBranchForMain,
+            ));
+        }
         return None;
     };
     let branch_figure = Arc::new(rules::BRANCH_FOR_MAIN.figure(
