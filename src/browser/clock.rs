@@ -18,3 +18,8 @@ pub fn time_of_day() -> String {
     let now = Date::new_0();
     format!("{:02}:{:02}", now.get_hours(), now.get_minutes())
 }
+
+/// A text which no other call gives, in whatever tab.
+pub fn stamp() -> String {
+    format!("{} {}", Date::now(), js_sys::Math::random())
+}

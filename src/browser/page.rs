@@ -135,6 +135,11 @@ pub fn set_attribute(id: &str, name: &str, value: &str) {
     }
 }
 
+/// Whether the part which an event is about is folded open.
+pub fn is_open(target: Option<EventTarget>) -> bool {
+    nearest(target, "details").is_some_and(|part| part.has_attribute("open"))
+}
+
 /// Opens the dialog with this id over the page.
 pub fn open_dialog(id: &str) {
     if let Some(dialog) = dialog(id) {

@@ -74,7 +74,8 @@ pub(super) fn shown(page: Page, place: Place, writing: Writing) -> Shown {
         };
         page.with(|document| {
             Holding {
-                document,
+                record: document.sheet.record(place.holder),
+                drafts: &document.drafts,
                 assumptions,
                 system: page.system(),
             }

@@ -6,13 +6,13 @@
 use super::columns::{COLUMNS, Column, Content, Group};
 use super::field::{keypad, options, shown, unchosen, why_refused};
 use super::keys;
-use super::markup::{Markup, each, live, several, tag, unseen};
+use super::markup::{Markup, each, live, nothing, several, tag, unseen};
 use super::shared::Shared;
 use super::shown::{Holding, Shown, Writing, grade_mark, grades};
 use super::spot;
 use super::state::Page;
 use crate::browser::page as window;
-use crate::sheet::{Document, Shape, spec};
+use crate::sheet::{Document, Drafts, Item, Shape, UnitSystem, spec};
 use crate::words::{self, page};
 use crate::work::WorkedFeeder;
 use crate::working::{Grade, Holder, HolderId, Place};
@@ -154,6 +154,7 @@ pub(super) fn grid(page: Page) -> AnyView {
             keys::on_double_click(page, event.target());
         })
         .on("input", move |event| keys::on_typing(page, event.target()))
+        .with(tag("COLGROUP").children(COLUMNS.iter().map(|_| tag("COL").done())))
         .with(
             tag("THEAD")
                 .with(tag("TR").children(group_heads()))
@@ -214,82 +215,113 @@ fn cell_class(column: Column, before: Option<Column>) -> &'static str {
     }
 }
 
-/// What a row shows. Equal rows show the same, so only a changed row is drawn again.
+/// Of what a row is drawn. What was neither entered nor worked again is the very same, so an edit draws only the rows it
+/// has to do with.
 #[derive(Clone, PartialEq)]
-struct Row {
-    cells: Vec<Shown>,
-    grades: Vec<Grade>,
-    is_running: bool,
-    /// Why texts were refused, by column.
-    refusals: BTreeMap<usize, String>,
+struct Drawn {
+    item: Shared<Item>,
+    feeder: Shared<WorkedFeeder>,
+    drafts: Drafts,
+    system: UnitSystem,
     /// The cell being edited, where it is in this row.
     editing: Option<Editing>,
 }
 
-impl Row {
-    fn of(page: Page, id: HolderId) -> Option<Self> {
-        let system = page.system();
-        let feeder: Shared<WorkedFeeder> = page
-            .worked
-            .with(|worked| spot::feeder(worked, id).map(Shared::from))?;
-        let editing = page
-            .editing
-            .with(|editing| editing.clone().filter(|editing| editing.cell.row == id));
-        page.with(|document| {
-            let holding = Holding {
-                document,
-                assumptions: &feeder.assumptions,
-                system,
-            };
-            let cells: Vec<Shown> = COLUMNS
-                .iter()
-                .map(|column| column.shown(holding, &feeder))
-                .collect();
-            let refusals: BTreeMap<usize, String> = cells
-                .iter()
-                .enumerate()
-                .filter_map(|(position, shown)| match shown {
-                    Shown::Refused(text) => {
-                        let field = COLUMNS.get(position)?.field()?;
-                        Some((position, why_refused(field, text, system)))
-                    }
-                    _ => None,
-                })
-                .collect();
-            let holder = Holder::Feeder(id);
-            let mut grades = grades(feeder.notes.iter());
-            let has_draft = document.drafts.keys().any(|place| place.holder == holder);
-            if has_draft && !grades.contains(&Grade::Query) {
-                grades.push(Grade::Query);
-                grades.sort();
+/// What a row shows.
+struct Row {
+    cells: Vec<Shown>,
+    grades: Vec<Grade>,
+    /// Why texts were refused, by column.
+    refusals: BTreeMap<usize, String>,
+    editing: Option<Editing>,
+}
+
+impl Drawn {
+    /// What there is to draw of a feeder; `row` is where it was found last, and is found again.
+    fn of(page: Page, id: HolderId, row: &mut usize) -> Option<Self> {
+        let holder = Holder::Feeder(id);
+        let (item, drafts) = page.with(|document| {
+            let items = &document.sheet.feeders;
+            if items.get(*row).is_none_or(|item| item.id != id) {
+                *row = items.iter().position(|item| item.id == id)?;
             }
-            Some(Self {
-                cells,
-                grades,
-                is_running: feeder.is_running,
-                refusals,
-                editing,
-            })
+            let drafts = document.drafts.iter();
+            let drafts: Drafts = drafts
+                .filter(|(place, _)| place.holder == holder)
+                .map(|(place, text)| (*place, text.clone()))
+                .collect();
+            Some((items.get(*row).map(Shared::from)?, drafts))
+        })?;
+        let feeder = page.worked.with(|worked| {
+            let there = worked.feeders.get(*row).filter(|feeder| feeder.id == id);
+            there.or(spot::feeder(worked, id)).map(Shared::from)
+        })?;
+        Some(Self {
+            item,
+            feeder,
+            drafts,
+            system: page.system(),
+            editing: page
+                .editing
+                .with(|editing| editing.clone().filter(|editing| editing.cell.row == id)),
         })
+    }
+
+    fn row(&self) -> Row {
+        let holding = Holding {
+            record: Some(&self.item.record),
+            drafts: &self.drafts,
+            assumptions: &self.feeder.assumptions,
+            system: self.system,
+        };
+        let cells: Vec<Shown> = COLUMNS
+            .iter()
+            .map(|column| column.shown(holding, &self.feeder))
+            .collect();
+        let refusals: BTreeMap<usize, String> = cells
+            .iter()
+            .enumerate()
+            .filter_map(|(position, shown)| match shown {
+                Shown::Refused(text) => {
+                    let field = COLUMNS.get(position)?.field()?;
+                    Some((position, why_refused(field, text, self.system)))
+                }
+                _ => None,
+            })
+            .collect();
+        let mut grades = grades(self.feeder.notes.iter());
+        if !self.drafts.is_empty() && !grades.contains(&Grade::Query) {
+            grades.push(Grade::Query);
+            grades.sort();
+        }
+        Row {
+            cells,
+            grades,
+            refusals,
+            editing: self.editing.clone(),
+        }
     }
 }
 
 fn row(page: Page, id: HolderId) -> AnyView {
-    let row = Memo::new(move |_| Row::of(page, id));
+    let place = StoredValue::new(0);
+    let drawn = Memo::new(move |_| {
+        let mut row = place.get_value();
+        let drawn = Drawn::of(page, id, &mut row);
+        place.set_value(row);
+        drawn
+    });
     tag("TR")
         .live("class", move || {
-            row.with(|row| {
-                row.as_ref()
-                    .filter(|row| !row.is_running)
-                    .map(|_| "standby".to_owned())
+            drawn.with(|drawn| {
+                let drawn = drawn.as_ref()?;
+                (!drawn.feeder.is_running).then(|| "standby".to_owned())
             })
         })
         .child(live(move || {
-            row.with(|row| {
-                several(
-                    row.as_ref()
-                        .map_or_else(Vec::new, |row| cells(page, id, row)),
-                )
+            drawn.with(|drawn| match drawn {
+                Some(drawn) => several(cells(page, id, &drawn.row())),
+                None => nothing(),
             })
         }))
         .done()

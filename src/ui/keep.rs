@@ -13,6 +13,8 @@ use leptos::prelude::*;
 
 /// The sheet in hand.
 const SHEET: &str = "ventrail/1/sheet";
+/// Who wrote the sheet last, and when.
+const STAMP: &str = "ventrail/1/stamp";
 /// What this tab goes on with while another tab has written the sheet.
 const ASIDE: &str = "ventrail/1/aside";
 /// The text which is being typed, with its place.
@@ -53,8 +55,8 @@ pub(super) struct Keeping {
     pub(super) elsewhere: RwSignal<Option<String>>,
     /// What could not be opened.
     pub(super) rescued: RwSignal<Option<Rescued>>,
-    /// The text this tab has last read from the store or written to it.
-    last: StoredValue<Option<String>>,
+    /// The stamp of the text which this tab has last read from the store or written to it.
+    stamp: StoredValue<Option<String>>,
     /// The text being typed which is still to be written.
     typing: StoredValue<Option<String>>,
 }
@@ -109,7 +111,7 @@ impl Keeping {
             files: RwSignal::new(Vec::new()),
             elsewhere: RwSignal::new(None),
             rescued: RwSignal::new(earlier()),
-            last: StoredValue::new(None),
+            stamp: StoredValue::new(store::read(STAMP)),
             typing: StoredValue::new(None),
         };
         let Some(text) = store::read(SHEET) else {
@@ -124,7 +126,6 @@ impl Keeping {
             Ok(document) => {
                 keeping.recall_file(&document);
                 keeping.store.set(Store::Kept(clock::time_of_day()));
-                keeping.last.set_value(Some(text));
                 let document = with_typing(document);
                 (keeping, document)
             }
@@ -138,8 +139,7 @@ impl Keeping {
     /// From now on, says so when another tab changes the sheet.
     pub(super) fn watch_other_tabs(self) {
         store::on_change_elsewhere(SHEET, move |text| {
-            let known = self.last.try_get_value().flatten();
-            if text.is_some() && text != known {
+            if text.is_some() {
                 self.elsewhere.try_set(text);
             }
         });
@@ -156,7 +156,7 @@ impl Keeping {
         let kept = if self.is_other_tab_ahead() {
             store::write(ASIDE, &text)
         } else {
-            self.write_sheet(text)
+            self.write_sheet(&text)
         };
         self.store.set(match kept {
             Ok(()) => Store::Kept(clock::time_of_day()),
@@ -167,8 +167,7 @@ impl Keeping {
 
     /// Goes on with this tab's sheet.
     pub(super) fn keep_this(self, document: &Document) {
-        self.last.set_value(store::read(SHEET));
-        self.elsewhere.set(None);
+        self.is_up_to_date();
         self.keep(document);
         store::remove(ASIDE);
     }
@@ -178,8 +177,7 @@ impl Keeping {
         let text = self.elsewhere.get_untracked()?;
         let read = file::read(&text);
         if read.is_ok() {
-            self.last.set_value(store::read(SHEET));
-            self.elsewhere.set(None);
+            self.is_up_to_date();
             store::remove(ASIDE);
         }
         Some(read)
@@ -241,9 +239,11 @@ impl Keeping {
         store::remove(TYPING);
     }
 
-    fn write_sheet(self, text: String) -> Result<(), NotKept> {
-        store::write(SHEET, &text)?;
-        self.last.set_value(Some(text));
+    fn write_sheet(self, text: &str) -> Result<(), NotKept> {
+        store::write(SHEET, text)?;
+        let stamp = clock::stamp();
+        store::write(STAMP, &stamp)?;
+        self.stamp.set_value(Some(stamp));
         Ok(())
     }
 
@@ -252,12 +252,17 @@ impl Keeping {
         if self.elsewhere.with_untracked(Option::is_some) {
             return true;
         }
-        let now = store::read(SHEET);
-        let is_ahead = now.is_some() && now != self.last.get_value();
+        let is_ahead = store::read(STAMP) != self.stamp.get_value();
         if is_ahead {
-            self.elsewhere.set(now);
+            self.elsewhere.set(store::read(SHEET));
         }
-        is_ahead
+        self.elsewhere.with_untracked(Option::is_some)
+    }
+
+    /// Goes on from what the store holds now, whoever wrote it.
+    fn is_up_to_date(self) {
+        self.stamp.set_value(store::read(STAMP));
+        self.elsewhere.set(None);
     }
 
     fn set_aside(self, text: String, why: NotOpened) {
@@ -266,6 +271,7 @@ impl Keeping {
             .find(|key| store::read(key).is_none_or(|kept| kept == text));
         let Some(key) = free else {
             // Everything is taken: the text stays where it is, and counts as another tab's until the person chooses.
+            self.elsewhere.set(Some(text));
             return;
         };
         if store::write(key, &text).is_ok() {

@@ -3,7 +3,6 @@
 use super::figure;
 use super::go_to;
 use super::markup::{button, each, live, nothing, several, tag};
-use super::names;
 use super::notes::Key;
 use super::shown::{Shown, grade_mark, mark};
 use super::spot::Spot;
@@ -12,7 +11,7 @@ use crate::browser::page as window;
 use crate::sheet::Edit;
 use crate::words::{self, TotalWords, page};
 use crate::work::{Total, TotalKind, Verdict};
-use crate::working::{Holder, HolderId, Ink};
+use crate::working::{Holder, HolderId, Ink, MarginNote};
 use leptos::prelude::*;
 
 /// The id of the margin.
@@ -166,9 +165,19 @@ fn note_view(page: Page, key: Key) -> AnyView {
     let id = key.id();
     let answer_id = format!("{id}-answer");
     let place = key.place;
+    // Figures are not compared: what a note says is in its kind.
+    let note = Memo::new(move |_| {
+        page.notes.with(|notes| {
+            let note = notes.get(key)?;
+            Some((note.grade, note.kind.clone()))
+        })
+    });
     let said = live(move || {
         let system = page.system();
-        let note = page.notes.with(|notes| notes.get(key).cloned());
+        let note = note.with(|note| {
+            let (grade, kind) = note.clone()?;
+            Some(MarginNote::new(grade, key.place.field, kind).held_by(key.place.holder))
+        });
         let Some(note) = note else {
             return nothing();
         };
@@ -183,11 +192,14 @@ fn note_view(page: Page, key: Key) -> AnyView {
         ])
     });
     let at = move || {
-        let at = page.with(|document| words::place(&place, |id| names::item(document, id)));
+        let at = page
+            .names
+            .with(|names| words::place(&place, |id| names.get(&id).cloned().unwrap_or_default()));
         format!("{}: {at}", page::go_to_subject())
     };
     let answer = move || {
-        page.with(|document| document.answers.get(&key.note_ref()).cloned())
+        page.answers
+            .with(|answers| answers.get(&key.note_ref()).cloned())
             .unwrap_or_default()
     };
     tag("LI")

@@ -3,6 +3,7 @@
 use crate::sheet::{Document, Edit, Item};
 use crate::words::page;
 use crate::working::{Field, Holder, HolderId};
+use std::collections::BTreeMap;
 use std::sync::Arc;
 
 /// The name of a holder: tag of a feeder, name of a source, or its row where it has none.
@@ -17,6 +18,20 @@ pub(super) fn holder(document: &Document, holder: Holder) -> String {
             named(&sheet.sources, id, Field::SourceName).unwrap_or_else(page::unnamed_source)
         }
     }
+}
+
+/// The names of all feeders and sources.
+pub(super) fn all(document: &Document) -> BTreeMap<HolderId, String> {
+    let sheet = &document.sheet;
+    let feeders = sheet.feeders.iter().enumerate().map(|(row, item)| {
+        let name = name_or_row(item, Field::Tag, row).unwrap_or_else(page::untagged_feeder);
+        (item.id, name)
+    });
+    let sources = sheet.sources.iter().enumerate().map(|(row, item)| {
+        let name = name_or_row(item, Field::SourceName, row).unwrap_or_else(page::unnamed_source);
+        (item.id, name)
+    });
+    feeders.chain(sources).collect()
 }
 
 /// The name of a feeder or a source, whichever has this identity.
@@ -38,10 +53,14 @@ pub(super) fn edit(edit: &Edit, document: &Document) -> String {
 
 /// The name of an item, or else its row, counted from one.
 fn named(items: &[Arc<Item>], id: HolderId, field: Field) -> Result<String, usize> {
-    let row = items.iter().position(|item| item.id == id).unwrap_or(0);
-    match items.get(row).map(|item| item.record.text(field)) {
-        Some(name) if !name.is_empty() => Ok(name.to_owned()),
-        _ => Err(row + 1),
+    let found = items.iter().enumerate().find(|(_, item)| item.id == id);
+    found.map_or(Err(0), |(row, item)| name_or_row(item, field, row))
+}
+
+fn name_or_row(item: &Item, field: Field, row: usize) -> Result<String, usize> {
+    match item.record.text(field) {
+        "" => Err(row + 1),
+        name => Ok(name.to_owned()),
     }
 }
 

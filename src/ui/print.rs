@@ -140,9 +140,10 @@ impl Summary {
             .done()
     }
 
-    fn holding<'a>(&'a self, plain: &'a Document) -> Holding<'a> {
+    fn holding(&self, holder: Holder) -> Holding<'_> {
         Holding {
-            document: plain,
+            record: self.document.sheet.record(holder),
+            drafts: &self.document.drafts,
             assumptions: &self.worked.assumptions,
             system: self.system,
         }
@@ -152,7 +153,7 @@ impl Summary {
     fn counting(&self, place: Place, writing: Writing) -> Shown {
         let traced = stand_in(place).and_then(|spot| spot.traced(&self.worked));
         let shown = self
-            .holding(&self.document)
+            .holding(place.holder)
             .counting(place, traced.as_ref(), writing);
         match shown {
             Shown::Nothing => Shown::Value(Ink::Worked, words::gap(place.field).to_owned()),
@@ -290,11 +291,9 @@ impl Summary {
                         field: *field,
                     };
                     let traced = stand_in(place).and_then(|spot| spot.traced(&self.worked));
-                    let shown = self.holding(&self.document).counting(
-                        place,
-                        traced.as_ref(),
-                        Writing::Bare,
-                    );
+                    let shown =
+                        self.holding(place.holder)
+                            .counting(place, traced.as_ref(), Writing::Bare);
                     shown_cell(&shown, *is_number)
                 })
                 .collect();
@@ -344,7 +343,7 @@ impl Summary {
                     field: Field::Run(run, RunField::Length),
                 };
                 let shown = self
-                    .holding(&self.document)
+                    .holding(place.holder)
                     .counting(place, None, Writing::Bare);
                 row.push(shown_cell(&shown, true));
                 row.push(shown_cell(
@@ -363,7 +362,7 @@ impl Summary {
                 field: Field::ShortCircuitRating,
             };
             let rating = self
-                .holding(&self.document)
+                .holding(rating.holder)
                 .counting(rating, None, Writing::Bare);
             row.push(shown_cell(&rating, true));
             row
@@ -468,9 +467,9 @@ impl Summary {
                             holder,
                             field: *field,
                         };
-                        let shown =
-                            self.holding(&self.document)
-                                .counting(place, None, Writing::Bare);
+                        let shown = self
+                            .holding(place.holder)
+                            .counting(place, None, Writing::Bare);
                         shown_cell(&shown, *is_number)
                     })
                     .collect();

@@ -4,7 +4,7 @@ use super::markup::tag;
 use super::spot::Traced;
 use crate::assume::Assumption;
 use crate::quantity::{Kind, Unit};
-use crate::sheet::{Document, Entry, UnitSystem};
+use crate::sheet::{Drafts, Entry, Record, UnitSystem};
 use crate::words::{self, page};
 use crate::working::{Amount, Grade, Ink, MarginNote, Origin, Place};
 use leptos::prelude::*;
@@ -68,8 +68,10 @@ pub(super) const fn ink_class(ink: Ink) -> &'static str {
 /// What a place holds and what stands in for it: the parts of which [`Shown`] is made.
 #[derive(Clone, Copy)]
 pub(super) struct Holding<'a> {
-    /// The document.
-    pub(super) document: &'a Document,
+    /// What was entered for its holder, where the holder is there.
+    pub(super) record: Option<&'a Record>,
+    /// What was refused, of this holder at least.
+    pub(super) drafts: &'a Drafts,
     /// What was assumed, for this holder at least.
     pub(super) assumptions: &'a [Assumption],
     /// The units.
@@ -90,7 +92,7 @@ pub(super) enum Writing {
 impl Holding<'_> {
     /// What stands at `place`, with `worked` where nothing was entered but a value follows from others.
     pub(super) fn at(self, place: Place, worked: Option<&Traced>, writing: Writing) -> Shown {
-        match self.document.drafts.get(&place) {
+        match self.drafts.get(&place) {
             Some(draft) => Shown::Refused(draft.clone()),
             None => self.counting(place, worked, writing),
         }
@@ -99,8 +101,7 @@ impl Holding<'_> {
     /// As [`Holding::at`], but what counts: texts which were refused count for nothing.
     pub(super) fn counting(self, place: Place, worked: Option<&Traced>, writing: Writing) -> Shown {
         let field = place.field;
-        let record = self.document.sheet.record(place.holder);
-        if let Some(entered) = record.and_then(|record| record.get(field)) {
+        if let Some(entered) = self.record.and_then(|record| record.get(field)) {
             return Shown::Value(Ink::Entered, self.entered(place, entered, writing));
         }
         if let Some(traced) = worked {

@@ -12,11 +12,12 @@ use super::shared::Shared;
 use super::spot::Spot;
 use crate::browser::page as window;
 use crate::entry;
-use crate::sheet::{Choice, Document, Edit, History, Sheet, UnitSystem};
+use crate::sheet::{Answers, Choice, Document, Edit, History, Sheet, UnitSystem};
 use crate::words::{self, page};
 use crate::work::{self, Worked};
 use crate::working::{Field, HolderId, Place};
 use leptos::prelude::*;
+use std::collections::BTreeMap;
 
 /// Everything a component may need. `history` is the only state of the sheet; the rest follows from it, or is a matter
 /// of looking: what is open, what is read, what is said.
@@ -28,6 +29,10 @@ pub(super) struct Page {
     pub(super) worked: Memo<Shared<Worked>>,
     /// All margin notes, gravest first, those of refused texts among them.
     pub(super) notes: Memo<Shared<Notes>>,
+    /// What the feeders and sources are called.
+    pub(super) names: Memo<BTreeMap<HolderId, String>>,
+    /// What was answered.
+    pub(super) answers: Memo<Answers>,
     /// What is under the cursor.
     pub(super) spot: RwSignal<Option<Spot>>,
     /// What is pinned in the working strip.
@@ -80,6 +85,8 @@ impl Page {
             history,
             worked,
             notes,
+            names: Memo::new(move |_| history.with(|history| names::all(history.now()))),
+            answers: Memo::new(move |_| history.with(|history| history.now().answers.clone())),
             spot: RwSignal::new(None),
             pinned: RwSignal::new(None),
             is_chain_open: RwSignal::new(false),

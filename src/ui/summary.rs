@@ -6,7 +6,6 @@ use super::demos::DEMOS;
 use super::figure::figures;
 use super::go_to;
 use super::markup::{button, live, nothing, several, tag};
-use super::names;
 use super::shown::ink_class;
 use super::spot::{PanelPart, Spot};
 use super::state::Page;
@@ -133,6 +132,8 @@ pub(super) fn assumptions(page: Page) -> AnyView {
             page::assumption_count(count)
         )
     };
+    // A large sheet assumes thousands of values: they are written only to be read.
+    let is_open = RwSignal::new(false);
     let heads = [
         page::head_field(),
         page::head_value(),
@@ -142,9 +143,18 @@ pub(super) fn assumptions(page: Page) -> AnyView {
     let heads = heads.map(|head| tag("TH").set("scope", "col").text(head).done());
     let table = tag("TABLE")
         .with(tag("THEAD").with(tag("TR").children(heads)))
-        .with(tag("TBODY").child(live(move || several(assumption_rows(page)))));
+        .with(tag("TBODY").child(live(move || {
+            if is_open.get() {
+                several(assumption_rows(page))
+            } else {
+                nothing()
+            }
+        })));
     tag("DETAILS")
         .class("assumptions")
+        .on("toggle", move |event| {
+            is_open.set(window::is_open(event.target()));
+        })
         .with(tag("SUMMARY").live_text(count))
         .with(table)
         .done()
@@ -154,8 +164,10 @@ fn assumption_rows(page: Page) -> Vec<AnyView> {
     let system = page.system();
     page.worked.with(|worked| {
         let assumed = &worked.assumptions;
-        let lines = page.with(|document| {
-            words::assumption_lines(assumed, system, |id| names::item(document, id))
+        let lines = page.names.with(|names| {
+            words::assumption_lines(assumed, system, |id| {
+                names.get(&id).cloned().unwrap_or_default()
+            })
         });
         lines
             .into_iter()
