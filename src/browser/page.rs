@@ -81,6 +81,20 @@ pub fn focused_within(selector: &str) -> Option<String> {
     Some(around.id())
 }
 
+/// Has the input with the focus take what is typed in it, as if it were left.
+pub fn finish_typing() {
+    let focused = document().and_then(|document| document.active_element());
+    let input: Option<HtmlElement> = focused
+        .filter(|element| element.matches("input, textarea").unwrap_or(false))
+        .and_then(|element| element.dyn_into().ok());
+    if let Some(input) = input
+        && input.blur().is_ok()
+    {
+        // Fails only for elements which cannot have the focus; this one had it.
+        let _ = input.focus();
+    }
+}
+
 /// Whether the window has the focus, and not another one.
 pub fn has_focus() -> bool {
     document().is_some_and(|document| document.has_focus().unwrap_or(true))

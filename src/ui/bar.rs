@@ -2,6 +2,7 @@
 
 use super::demos;
 use super::keep::{NotOpened, Store};
+use super::keys;
 use super::margin::MARGIN;
 use super::markup::{self, Markup, button, live, several, tag};
 use super::names;
@@ -41,6 +42,11 @@ pub(super) fn bar(page: Page) -> AnyView {
         .set("aria-label", page::files_label())
         .with(named("new-sheet", page::new_sheet(), move || {
             start_anew(page)
+        }))
+        .with(named("demo-sheet", page::demo_sheet(), move || {
+            if let Some(demo) = demos::DEMOS.first() {
+                open_demo(page, demo);
+            }
         }))
         .with(named("open-file", page::open_file(), choose_file))
         .with(named("save-file", page::save_file(), move || save(page)))
@@ -159,6 +165,9 @@ fn kept(page: Page) -> String {
 
 /// Saves the sheet as a file. Called while a click or a key is handled, since browsers ask for that.
 pub(super) fn save(page: Page) {
+    // What is still being typed belongs into the file.
+    keys::finish(page);
+    window::finish_typing();
     let document = page.peek(Document::clone);
     let text = file::write(&document);
     files::save(&names::file(&document), text, move |saved| match saved {
@@ -308,6 +317,7 @@ fn rescued(page: Page) -> Option<AnyView> {
     let why = match &rescued.why {
         NotOpened::Stopped => page::stopped_twice().to_owned(),
         NotOpened::Earlier => page::rescued_earlier().to_owned(),
+        NotOpened::Replaced => page::rescued_replaced().to_owned(),
         NotOpened::Unreadable(refusal) => format!(
             "{} {}",
             page::store_unreadable(),

@@ -164,7 +164,7 @@ impl Column {
     }
 
     /// What is under the cursor in this column of a feeder.
-    pub(super) const fn spot(self, id: HolderId) -> Option<Spot> {
+    pub(super) fn spot(self, id: HolderId, feeder: Option<&WorkedFeeder>) -> Option<Spot> {
         let part = match self.content {
             Content::Field(_, Some(part)) | Content::Part(part) => part,
             Content::Field(field, None) => {
@@ -177,7 +177,16 @@ impl Column {
             Content::Conductors(Run::Ahead) => FeederPart::Ahead(RunPart::Size),
             Content::Conductors(_) => FeederPart::Behind(RunPart::Size),
             Content::Grounding => FeederPart::Behind(RunPart::Grounding),
-            Content::Reactor => FeederPart::ReactorEntered(ReactorPart::Inductance),
+            Content::Reactor => match feeder.map(|feeder| &feeder.reactor) {
+                Some(reactor) if reactor.entered.is_some() => {
+                    FeederPart::ReactorEntered(ReactorPart::Inductance)
+                }
+                Some(reactor) if reactor.advised.is_some() => {
+                    FeederPart::ReactorAdvised(ReactorPart::Inductance)
+                }
+                // Why none is asked for.
+                _ => FeederPart::SourceImpedance,
+            },
             Content::Marks => return None,
         };
         Some(Spot::Feeder(id, part))

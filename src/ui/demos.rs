@@ -1,5 +1,7 @@
 //! Demo sheets in invented data.
 
+use crate::file;
+use crate::sheet::Document;
 use crate::words::page;
 
 /// A demo sheet.
@@ -8,6 +10,13 @@ pub(super) struct Demo {
     pub(super) name: &'static str,
     /// Its file.
     pub(super) text: &'static str,
+}
+
+/// Whether a document is a demo sheet as it came.
+pub(super) fn is_demo(document: &Document) -> bool {
+    DEMOS
+        .iter()
+        .any(|demo| file::read(demo.text).as_ref() == Ok(document))
 }
 
 /// The demo sheets.

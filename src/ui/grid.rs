@@ -150,8 +150,11 @@ pub(super) fn grid(page: Page) -> AnyView {
         .on("focusout", move |event| {
             keys::on_leave(page, event.target())
         })
-        .on("dblclick", move |event| {
-            keys::on_double_click(page, event.target());
+        .on("mousedown", move |event| {
+            keys::on_press(page, event.target());
+        })
+        .on("click", move |event| {
+            keys::on_click(page, event.target());
         })
         .on("input", move |event| keys::on_typing(page, event.target()))
         .with(tag("COLGROUP").children(COLUMNS.iter().map(|_| tag("COL").done())))

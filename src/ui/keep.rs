@@ -3,6 +3,7 @@
 //! The store is a net under the page, the file is the truth. Nothing kept is written over unseen: what another tab
 //! wrote, or what could not be read, stays until the person has chosen.
 
+use super::demos;
 use crate::browser::panic::{self, Rescue};
 use crate::browser::store::{self, NotKept};
 use crate::browser::{clock, on_next_frame};
@@ -28,6 +29,8 @@ const RESCUED: [&str; 4] = [
     "ventrail/1/rescued-3",
     "ventrail/1/rescued-4",
 ];
+/// The sheet which another one replaced, where it is in no file: undo brings it back only while the tab is open.
+const REPLACED: &str = "ventrail/1/replaced";
 /// How often in a row the program stopped.
 const STOPS: &str = "ventrail/1/stops";
 /// Stops in a row after which the sheet is not opened again by itself.
@@ -101,6 +104,8 @@ pub(super) enum NotOpened {
     Unreadable(file::Refusal),
     /// It was set aside at an earlier start.
     Earlier,
+    /// Another sheet replaced it, and it is in no file.
+    Replaced,
 }
 
 impl Keeping {
@@ -207,6 +212,23 @@ impl Keeping {
             .files
             .try_with_untracked(|files| matches!(file_of(files, document), Some((_, true))));
         is_refused && is_filed != Some(true)
+    }
+
+    /// The document is about to be replaced by another one: it is kept where no file has it.
+    pub(super) fn is_replaced(self, document: &Document) {
+        let is_filed = self
+            .files
+            .with_untracked(|files| matches!(file_of(files, document), Some((_, true))));
+        let is_nothing = document.sheet.is_empty() && document.drafts.is_empty();
+        if !is_filed && !is_nothing && !demos::is_demo(document) {
+            // Where the store is full, undo is left, and what is not kept is said anyway.
+            let _ = store::write(REPLACED, &file::write(document));
+        }
+    }
+
+    /// The document which was replaced is back.
+    pub(super) fn is_back(self) {
+        store::remove(REPLACED);
     }
 
     /// The person is done with what could not be opened.
@@ -320,11 +342,13 @@ fn file_of(files: &[Filed], document: &Document) -> Option<(String, bool)> {
 }
 
 fn earlier() -> Option<Rescued> {
-    RESCUED.into_iter().find_map(|key| {
+    let rescued = RESCUED.map(|key| (key, NotOpened::Earlier));
+    let replaced = [(REPLACED, NotOpened::Replaced)];
+    rescued.into_iter().chain(replaced).find_map(|(key, why)| {
         Some(Rescued {
             key,
             text: store::read(key)?,
-            why: NotOpened::Earlier,
+            why,
         })
     })
 }

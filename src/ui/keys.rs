@@ -6,6 +6,7 @@ use super::columns::{COLUMNS, Content};
 use super::feeders::{self, Command};
 use super::field::{choose, is_taken, text_to_edit};
 use super::grid::{Cell, EDITOR, Editing, How, go_to, mark, rows};
+use super::spot;
 use super::state::Page;
 use crate::browser::page::{self as window, Event, EventTarget, Key};
 use crate::sheet::{Edit, Shape, spec};
@@ -54,7 +55,9 @@ pub(super) fn on_focus(page: Page, target: Option<EventTarget>) {
     page.spot
         .set(cell.column().and_then(|column| match cell.place() {
             Some(place) => Some(super::field::spot_of(page, place)),
-            None => column.spot(cell.row),
+            None => page.worked.with_untracked(|worked| {
+                column.spot(cell.row, spot::feeder(worked, cell.row).map(AsRef::as_ref))
+            }),
         }));
 }
 
@@ -67,12 +70,28 @@ pub(super) fn on_leave(page: Page, target: Option<EventTarget>) {
     }
 }
 
-/// A double click edits.
-pub(super) fn on_double_click(page: Page, target: Option<EventTarget>) {
+/// The mouse goes down somewhere in the grid.
+pub(super) fn on_press(page: Page, target: Option<EventTarget>) {
+    let cell = cell_of(target);
+    let is_there = cell.is_some_and(|cell| window::focused_within("td, th") == Some(cell.id()));
+    page.pressed.set_value(cell.filter(|_| is_there));
+}
+
+/// A click on the cell which had the focus already edits it.
+pub(super) fn on_click(page: Page, target: Option<EventTarget>) {
+    let pressed = page.pressed.get_value();
     if page.editing.with_untracked(Option::is_none)
-        && let Some(cell) = cell_of(target)
+        && let Some(cell) = cell_of(target).filter(|cell| Some(*cell) == pressed)
     {
         begin(page, cell, None);
+    }
+}
+
+/// Takes what is being edited, as if the cell were left.
+pub(super) fn finish(page: Page) {
+    if let Some(editing) = page.editing.get_untracked() {
+        take(page);
+        go_to(page, editing.cell);
     }
 }
 

@@ -39,6 +39,8 @@ pub(super) struct Page {
     pub(super) pinned: RwSignal<Option<Spot>>,
     /// Whether the working strip shows the whole chain.
     pub(super) is_chain_open: RwSignal<bool>,
+    /// The cell on which the mouse went down while it had the focus.
+    pub(super) pressed: StoredValue<Option<Cell>>,
     /// The feeder whose form is open.
     pub(super) form: RwSignal<Option<HolderId>>,
     /// The group of sentences which is open as a list.
@@ -90,6 +92,7 @@ impl Page {
             spot: RwSignal::new(None),
             pinned: RwSignal::new(None),
             is_chain_open: RwSignal::new(false),
+            pressed: StoredValue::new(None),
             form: RwSignal::new(None),
             group: RwSignal::new(None),
             cursor: RwSignal::new(None),
@@ -127,6 +130,9 @@ impl Page {
         let edit = self
             .history
             .with_untracked(|history| history.undoable().cloned());
+        if matches!(edit, Some(Edit::Replace(_))) {
+            self.keeping.is_back();
+        }
         // Named by the document it leads to: there a deleted feeder has its tag again.
         self.change_and_say(History::undo, edit, page::undone, page::nothing_to_undo());
     }
@@ -136,6 +142,9 @@ impl Page {
         let edit = self
             .history
             .with_untracked(|history| history.redoable().cloned());
+        if matches!(edit, Some(Edit::Replace(_))) {
+            self.peek(|document| self.keeping.is_replaced(document));
+        }
         self.change_and_say(History::redo, edit, page::redone, page::nothing_to_redo());
     }
 
@@ -147,6 +156,7 @@ impl Page {
         self.spot.set(None);
         self.editing.set(None);
         self.cursor.set(None);
+        self.peek(|document| self.keeping.is_replaced(document));
         self.edit(Edit::Replace(Box::new(document)));
     }
 

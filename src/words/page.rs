@@ -30,6 +30,7 @@ texts! {
     bar_label = "Sheet and files";
     files_label = "Files and print";
     new_sheet = "New sheet";
+    demo_sheet = "Demo";
     open_file = "Open file";
     save_file = "Save file";
     print = "Print";
@@ -252,6 +253,7 @@ texts! {
     store_unreadable = "What this browser kept of the last sheet could not be read. It is kept as it is; you can save it as a file and look at it.";
     save_kept_text = "Save what was kept as a file";
     rescued_earlier = "A sheet which could not be opened earlier is still kept in this browser.";
+    rescued_replaced = "A sheet which you replaced by another one is in no file, and is still kept in this browser.";
     rescued_drop = "I do not need it any more";
     other_tab = "This sheet was changed in another tab. Nothing is lost: choose which of the two to go on with.";
     other_tab_take = "Take the other tab's sheet";

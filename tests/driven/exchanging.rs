@@ -146,3 +146,45 @@ fn browser_with_a_window_for_saving_is_asked_for_a_place() -> Outcome {
         Ok(())
     })
 }
+
+#[test]
+fn replaced_sheet_which_is_in_no_file_is_offered_again() -> Outcome {
+    drive(async |page| {
+        page.without_file_pickers().await?;
+        open_demo(page).await?;
+        // A demo as it came is no loss.
+        page.click("#new-sheet").await?;
+        page.reload().await?;
+        page.find("#welcome").await?;
+        assert_eq!(page.find_all("#rescued").await?.len(), 0);
+
+        page.click("#demo-sheet").await?;
+        page.click(&cell(0, column::LOAD)).await?;
+        page.press("Work of a day").await?;
+        page.press(Key::Enter).await?;
+        page.click("#new-sheet").await?;
+        page.reload().await?;
+        page.wait_for_text("#rescued", "in no file").await?;
+        page.click("#save-rescued").await?;
+        let text = page.wait_for_download("ventrail-rescued.json").await?;
+        assert!(text.contains("Work of a day"));
+        page.click("#drop-rescued").await?;
+        assert_eq!(page.find_all("#rescued").await?.len(), 0);
+        Ok(())
+    })
+}
+
+#[test]
+fn text_still_being_typed_is_in_the_saved_file() -> Outcome {
+    drive(async |page| {
+        page.without_file_pickers().await?;
+        open_demo(page).await?;
+        page.click(&cell(0, column::LOAD)).await?;
+        page.press("Not yet left").await?;
+        page.press(Key::Control + "s").await?;
+        let name = "brine-hall-pump-and-conveyor-panel-b-for-review.json";
+        assert!(page.wait_for_download(name).await?.contains("Not yet left"));
+        assert_eq!(focus(page).await?, "cell-0-1");
+        Ok(())
+    })
+}

@@ -133,6 +133,12 @@ fn cell_is_edited_replaced_given_up_and_emptied() -> Outcome {
                 .await
                 .is_ok()
         );
+        // A click goes to a cell, and one more edits it.
+        page.click(&cell(2, column::LOAD)).await?;
+        assert_eq!(page.find_all("#cell-editor").await?.len(), 0);
+        page.click(&cell(2, column::LOAD)).await?;
+        wait_for_focus(page, "cell-editor").await?;
+        page.press(Key::Escape).await?;
         // Worked cells take nothing.
         page.click(&cell(1, column::HEAT)).await?;
         page.press("5").await?;
