@@ -380,6 +380,9 @@ fn proof_of(id: &str) -> Option<Proof> {
             circuit::apparent_power(circuit::Phases::Three, Voltage::from_si(t[0]), Current::from_si(t[1])).si()
         }),
         "sizing.reactor.source_ratio" => Through(reactor_figures),
+        "physics.circuit.impedance_of_fault_current" => Of(&[SOURCE_POWER, (200.0, 600.0), (1e3, 1e5)], |t| {
+            circuit::impedance_of_fault_current(ApparentPower::from_si(t[0]), Voltage::from_si(t[1]), Current::from_si(t[2])).si()
+        }),
         "physics.circuit.impedance_on_base" => Of(&[(0.005, 0.2), SOURCE_POWER, SOURCE_POWER], |t| {
             circuit::impedance_on_base(Ratio::from_si(t[0]), ApparentPower::from_si(t[2]), ApparentPower::from_si(t[1])).si()
         }),
@@ -533,6 +536,7 @@ fn reactor_figures(draw: &mut Draw) -> Vec<Arc<Figure>> {
         frequency: draw.given(Field::SupplyFrequency, 50.0, 60.0),
         power: Some(draw.given(Field::TransformerPower, 1e4, 5e6)),
         impedance: draw.given(Field::TransformerImpedance, 0.01, 0.1),
+        fault: None,
         unbalance: draw.given(Field::VoltageUnbalance, 0.0, 0.05),
         has_capacitors: false,
         has_surges: false,

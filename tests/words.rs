@@ -808,6 +808,18 @@ fn every_note() -> Vec<NoteKind> {
             main_too: true,
         },
         NoteKind::NoBranchForMain,
+        NoteKind::StandbyLarger { tags: tags() },
+        NoteKind::WallRuleNearLimit {
+            inside: celsius(47.0),
+            limit: celsius(50.0),
+        },
+        NoteKind::OtherLoadsAtCurrent { names: tags() },
+        NoteKind::NoCellInColumn {
+            run: Run::Ahead,
+            column: celsius(60.0),
+        },
+        NoteKind::LengthMissing { run: Run::Behind },
+        NoteKind::SourceUnknown,
         NoteKind::ReactorLossUnused,
         NoteKind::NoMainFits { sum: amperes(8.0) },
         NoteKind::MainBelowRunning {

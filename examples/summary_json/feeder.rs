@@ -190,6 +190,7 @@ pub fn run<'a>(conductors: &'a Conductors, writer: Writer) -> Run<'a> {
         ConductorChoice::NoneFits { .. } => ("none_fits", None),
         ConductorChoice::TooHot => ("too_hot", None),
         ConductorChoice::NoTable => ("no_table", None),
+        ConductorChoice::NoCell { .. } => ("no_cell", None),
     };
     Run {
         place: match surrounding {

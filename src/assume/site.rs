@@ -102,11 +102,13 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
     let has_capacitors = reader.choice_or(Field::Capacitors, Choice::No).value == Choice::Yes;
     let has_surges = reader.choice_or(Field::Surges, Choice::No).value == Choice::Yes;
     let altitude = reader.quantity_or(Field::Altitude, Length::metres(0.0));
+    let source_fault = reader.quantity(Field::SourceFaultCurrent);
     let supply = voltage.map(|voltage| ReactorSupply {
         voltage,
         frequency,
         power: transformer.clone(),
         impedance: impedance.clone(),
+        fault: source_fault.clone(),
         unbalance,
         has_capacitors,
         has_surges,
@@ -116,7 +118,6 @@ pub fn site(sheet: &Sheet) -> SheetInputs {
         reader.choice_or(Field::MainType, Choice::InverseTimeBreaker),
         device,
     );
-    let source_fault = reader.quantity(Field::SourceFaultCurrent);
     let main_rating = reader.quantity(Field::MainRating);
     let main_short_circuit_rating = reader.quantity(Field::MainShortCircuitRating);
     let main_loss = reader.quantity(Field::MainLoss);

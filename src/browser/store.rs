@@ -33,6 +33,19 @@ pub fn remove(key: &str) {
     }
 }
 
+/// The keys which begin with `beginning`, in order.
+pub fn keys(beginning: &str) -> Vec<String> {
+    let Some(storage) = storage() else {
+        return Vec::new();
+    };
+    let mut keys: Vec<String> = (0..storage.length().unwrap_or(0))
+        .filter_map(|position| storage.key(position).ok().flatten())
+        .filter(|key| key.starts_with(beginning))
+        .collect();
+    keys.sort();
+    keys
+}
+
 /// Calls `act` with the new text whenever another tab changes what is under `key`.
 pub fn on_change_elsewhere(key: &'static str, mut act: impl FnMut(Option<String>) + 'static) {
     super::on_window("storage", move |event| {

@@ -150,6 +150,13 @@ pub fn impedance_on_base(impedance: Ratio, source: ApparentPower, base: Apparent
     impedance * (base / source)
 }
 
+/// Source impedance on the base of a drive, from the fault current of the source.
+///
+/// z = S_drive / (sqrt(3) * U * I_sc); U voltage between lines, I_sc fault current of the source.
+pub fn impedance_of_fault_current(base: ApparentPower, voltage: Voltage, fault: Current) -> Ratio {
+    base / apparent_power(Phases::Three, voltage, fault)
+}
+
 /// Fault current at the terminals of a transformer fed from an infinite bus.
 ///
 /// I = I_fl / (z * t); I_fl full-load current, z impedance as a ratio, t share of it which is counted: 0.9 for the

@@ -241,7 +241,7 @@ fn installed(
         return largest.and_then(Given::from_figure);
     };
     let field = Field::DeviceRating;
-    if !is_standard(entered.value, input.device.value, edition) {
+    if !is_standard(entered.value, rating_list(input.device.value), edition) {
         notes.push(MarginNote::new(
             Grade::Query,
             field,

@@ -41,8 +41,8 @@ pub struct FaultInput {
     pub impedance: Given<Ratio>,
     /// Whether that was measured on the unit, so that no tolerance is taken off.
     pub is_measured: bool,
-    /// The incoming run, where its length is entered and its size known.
-    pub run: Option<FaultRunInput>,
+    /// The incoming run, or the field which is missing of it.
+    pub run: Result<FaultRunInput, Field>,
 }
 
 /// The incoming run as the method sees it.
@@ -95,15 +95,15 @@ pub fn fault_at_panel(input: &FaultInput, notes: &mut Vec<MarginNote>) -> Fault 
         at_source,
         ..Fault::default()
     };
-    let Some((run, constant)) = input
-        .run
-        .as_ref()
+    let run = input.run.as_ref();
+    let Some((run, constant)) = run
+        .ok()
         .and_then(|run| Some((run, constant_of(run, notes)?)))
     else {
-        if input.run.is_none() {
+        if let Err(missing) = run {
             notes.push(MarginNote::new(
                 Grade::Query,
-                Field::Run(Run::Incoming, RunField::Length),
+                *missing,
                 NoteKind::FaultRunUnknown,
             ));
         }

@@ -1,6 +1,9 @@
 //! The input reactor: whether practice asks for one, and what an entered one is.
 
-use crate::physics::circuit::{Phases, apparent_power, impedance_on_base, reactor_inductance};
+use crate::math::reaches;
+use crate::physics::circuit::{
+    Phases, apparent_power, impedance_of_fault_current, impedance_on_base, reactor_inductance,
+};
 use crate::physics::heat::reactor_loss_by_motor;
 use crate::quantity::{ApparentPower, Current, Frequency, Power, Ratio, ShaftPower, Voltage};
 use crate::sizing::rules;
@@ -59,6 +62,8 @@ pub struct ReactorSupply {
     pub power: Option<Given<ApparentPower>>,
     /// Impedance of the source on its own base.
     pub impedance: Given<Ratio>,
+    /// Fault current of the source, where entered: it answers for the impedance where no transformer is entered.
+    pub fault: Option<Given<Current>>,
     /// Voltage unbalance at the panel.
     pub unbalance: Given<Ratio>,
     /// Switched capacitors on the bus.
@@ -90,14 +95,14 @@ pub struct ReactorInput {
 
 /// A source at least this many times the drive asks for a reactor ...
 const SOURCE_RATIO_LIMIT: f64 = 10.0;
-/// ... where it has at least this power. Two drive manuals agree; see `rectifier/` practice.
+/// ... where it has at least this power. Source: common practice of drive manuals, two of which agree.
 const SOURCE_POWER_LIMIT: ApparentPower = ApparentPower::kilovolt_amperes(500.0);
 /// Source impedance on the drive's base under which reactance is to be added.
 const SOURCE_IMPEDANCE_LIMIT: Ratio = Ratio::per_cent(1.0);
 /// Voltage unbalance from which practice asks for a reactor: published limits are 2 and 3 per cent, the lower is taken.
 const UNBALANCE_LIMIT: Ratio = Ratio::per_cent(2.0);
 /// A choke of this size in the drive answers source impedance and source power, never surges or capacitors.
-const ANSWERING_CHOKE: Ratio = Ratio::per_cent(4.0);
+pub const ANSWERING_CHOKE: Ratio = Ratio::per_cent(4.0);
 
 /// Works whether practice asks for a reactor, and what the entered and the advised ones are.
 pub fn reactor_of(
@@ -122,7 +127,8 @@ pub fn reactor_of(
         .as_ref()
         .filter(|percent| percent.value > Ratio::of_one(0.0))
         .and_then(|percent| entered_size(percent, input, supply, notes));
-    note_advice(input, advised_percent, &reasons, notes);
+    let on_drive_base = entered.as_ref().map(|size| on_base_of_drive(size, input));
+    note_advice(input, (advised_percent, on_drive_base), &reasons, notes);
     if input.loss.is_some() && entered.is_none() {
         notes.push(MarginNote::new(
             Grade::Query,
@@ -130,11 +136,9 @@ pub fn reactor_of(
             NoteKind::ReactorLossUnused,
         ));
     }
-    let is_answered = input
-        .percent
-        .as_ref()
+    let is_answered = on_drive_base
         .zip(advised_percent)
-        .is_some_and(|(entered, advised)| entered.value >= advised);
+        .is_some_and(|(entered, advised)| reaches(entered.to_one(), advised.to_one()));
     let advised = advised_percent
         .filter(|_| !is_answered)
         .map(|percent| advised_size(percent, input, supply));
@@ -151,9 +155,15 @@ fn source_figures(
     drive_power: &Arc<Figure>,
     supply: &ReactorSupply,
 ) -> (Option<Arc<Figure>>, Option<Arc<Figure>>) {
-    let (Some(source), Some(drive)) = (&supply.power, drive_power.quantity::<ApparentPower>())
-    else {
+    let Some(drive) = drive_power.quantity::<ApparentPower>() else {
         return (None, None);
+    };
+    let Some(source) = &supply.power else {
+        let by_fault = supply.fault.as_ref();
+        return (
+            None,
+            by_fault.map(|fault| impedance_by_fault(drive_power, drive, fault, supply)),
+        );
     };
     let ratio = rules::SOURCE_RATIO.figure(
         source.value / drive,
@@ -168,6 +178,23 @@ fn source_figures(
         ],
     );
     (Some(Arc::new(ratio)), Some(Arc::new(impedance)))
+}
+
+fn impedance_by_fault(
+    drive_power: &Arc<Figure>,
+    drive: ApparentPower,
+    fault: &Given<Current>,
+    supply: &ReactorSupply,
+) -> Arc<Figure> {
+    let impedance = impedance_of_fault_current(drive, supply.voltage.value, fault.value);
+    Arc::new(rules::SOURCE_IMPEDANCE_BY_FAULT.figure(
+        impedance,
+        [
+            Term::of("S_d", drive_power),
+            supply.voltage.term("U"),
+            fault.term("I_sc"),
+        ],
+    ))
 }
 
 fn reasons(
@@ -217,9 +244,15 @@ fn advised_step(reasons: &[ReactorReason]) -> Option<Ratio> {
     }
 }
 
+/// The percentage of an entered reactor on the base of the drive's rated input current, on which advice is given.
+fn on_base_of_drive(size: &ReactorSize, input: &ReactorInput) -> Ratio {
+    size.percent * (input.drive_input.value / size.reference.value)
+}
+
+/// Says what practice asks for, beside the entered reactor on the drive's base.
 fn note_advice(
     input: &ReactorInput,
-    advised: Option<Ratio>,
+    (advised, entered): (Option<Ratio>, Option<Ratio>),
     reasons: &[ReactorReason],
     notes: &mut Vec<MarginNote>,
 ) {
@@ -227,16 +260,20 @@ fn note_advice(
         return;
     };
     let reasons = reasons.to_vec();
-    let kind = match &input.percent {
+    // Zero entered says that there is none: that too is below what is advised.
+    let entered = entered.or_else(|| input.percent.as_ref().map(|_| Ratio::of_one(0.0)));
+    let kind = match entered {
         None => NoteKind::ReactorAdvised {
             percent: advised,
             reasons,
         },
-        Some(entered) if entered.value < advised => NoteKind::ReactorBelowAdvice {
-            entered: entered.value,
-            advised,
-            reasons,
-        },
+        Some(entered) if !reaches(entered.to_one(), advised.to_one()) => {
+            NoteKind::ReactorBelowAdvice {
+                entered,
+                advised,
+                reasons,
+            }
+        }
         Some(_) => return,
     };
     notes.push(MarginNote::new(Grade::Query, Field::ReactorPercent, kind));

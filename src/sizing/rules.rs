@@ -160,7 +160,7 @@ pub static CONDUCTOR_SIZE: Rule = Rule {
     gives: "size",
     form: Form::Choice,
     source: &NEC,
-    clause: "430.22, 430.122, 310.3(A), 310.10(G)",
+    clause: "430.22, 430.24, 430.122, 310.3(A), 310.10(G)",
     known: Known::CrossChecked,
 };
 
@@ -306,7 +306,7 @@ pub static DEVICE_PRODUCT: Rule = Rule {
     },
     source: &NEC,
     clause: "430.52(C)(1), 430.130(A)",
-    known: Known::CrossChecked,
+    known: Known::FromMemory,
 };
 
 /// The product where it is a standard rating, else the next higher one.
@@ -335,7 +335,7 @@ pub static DEVICE_DRIVE_LIMIT: Rule = Rule {
     gives: "I_n",
     form: Form::Choice,
     source: &NEC,
-    clause: "430.52(C)(2), 430.130(A)",
+    clause: "430.52(C)(2)",
     known: Known::Read,
 };
 
@@ -441,6 +441,19 @@ pub static SOURCE_IMPEDANCE: Rule = Rule {
     form: Form::Formula {
         expression: "z_t * S_d / S_t",
         symbols: &["z_t", "S_d", "S_t"],
+    },
+    source: &TRADE,
+    clause: "source impedance on the drive's base",
+    known: Known::Read,
+};
+
+/// Source impedance on the drive's base, from the fault current of the source.
+pub static SOURCE_IMPEDANCE_BY_FAULT: Rule = Rule {
+    id: "physics.circuit.impedance_of_fault_current",
+    gives: "z",
+    form: Form::Formula {
+        expression: "S_d / (sqrt(3) * U * I_sc)",
+        symbols: &["S_d", "U", "I_sc"],
     },
     source: &TRADE,
     clause: "source impedance on the drive's base",
@@ -948,6 +961,7 @@ pub fn all() -> Vec<&'static Rule> {
         &DRIVE_APPARENT_POWER,
         &SOURCE_RATIO,
         &SOURCE_IMPEDANCE,
+        &SOURCE_IMPEDANCE_BY_FAULT,
         &REACTOR_INDUCTANCE,
         &REACTOR_CURRENT,
         &REACTOR_HEAT_ASSUMED,

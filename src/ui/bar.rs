@@ -148,6 +148,7 @@ fn kept(page: Page) -> String {
     let here = match page.keeping.store.get() {
         Store::Untouched => None,
         Store::Kept(time) => Some(page::saved_here_at(&time)),
+        Store::Aside(_) => Some(page::kept_aside().to_owned()),
         Store::Refused(_) => Some(page::not_kept_here().to_owned()),
     };
     let in_file = page.with(|document| match page.keeping.file_of(document) {
@@ -318,6 +319,7 @@ fn rescued(page: Page) -> Option<AnyView> {
         NotOpened::Stopped => page::stopped_twice().to_owned(),
         NotOpened::Earlier => page::rescued_earlier().to_owned(),
         NotOpened::Replaced => page::rescued_replaced().to_owned(),
+        NotOpened::Aside => page::rescued_aside().to_owned(),
         NotOpened::Unreadable(refusal) => format!(
             "{} {}",
             page::store_unreadable(),

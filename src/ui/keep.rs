@@ -16,7 +16,7 @@ use leptos::prelude::*;
 const SHEET: &str = "ventrail/1/sheet";
 /// Who wrote the sheet last, and when.
 const STAMP: &str = "ventrail/1/stamp";
-/// What this tab goes on with while another tab has written the sheet.
+/// How the keys begin under which tabs go on while another one has written the sheet; each tab has a key of its own.
 const ASIDE: &str = "ventrail/1/aside";
 /// The text which is being typed, with its place.
 const TYPING: &str = "ventrail/1/typing";
@@ -39,6 +39,8 @@ const TOO_MANY_STOPS: u32 = 2;
 const SAME: &str = "same ";
 /// And how after it was changed.
 const CHANGED: &str = "changed ";
+/// Files which are remembered: undo comes back to what is in them, and each is a whole document.
+const FILES_KNOWN: usize = 4;
 
 /// What the notice after a panic offers.
 pub(super) const RESCUE: Rescue = Rescue {
@@ -60,6 +62,8 @@ pub(super) struct Keeping {
     pub(super) rescued: RwSignal<Option<Rescued>>,
     /// The stamp of the text which this tab has last read from the store or written to it.
     stamp: StoredValue<Option<String>>,
+    /// The key under which this tab goes on while another one has written the sheet.
+    aside: StoredValue<String>,
     /// The text being typed which is still to be written.
     typing: StoredValue<Option<String>>,
 }
@@ -71,6 +75,8 @@ pub(super) enum Store {
     Untouched,
     /// Kept at a time of day.
     Kept(String),
+    /// Kept beside the sheet of another tab, at a time of day, until the person has chosen between the two.
+    Aside(String),
     /// Not kept.
     Refused(NotKept),
 }
@@ -88,7 +94,7 @@ pub(super) struct Filed {
 #[derive(Debug, Clone, PartialEq)]
 pub(super) struct Rescued {
     /// The key under which it stays.
-    key: &'static str,
+    key: String,
     /// The text.
     pub(super) text: String,
     /// Why it was not opened.
@@ -106,17 +112,21 @@ pub(super) enum NotOpened {
     Earlier,
     /// Another sheet replaced it, and it is in no file.
     Replaced,
+    /// A tab went on with it while another one had written the sheet, and ended before the person chose.
+    Aside,
 }
 
 impl Keeping {
     /// Takes up what the browser kept: the document, and how things stand with it.
     pub(super) fn start() -> (Self, Document) {
+        let aside = format!("{ASIDE}/{}", clock::stamp());
         let keeping = Self {
             store: RwSignal::new(Store::Untouched),
             files: RwSignal::new(Vec::new()),
             elsewhere: RwSignal::new(None),
-            rescued: RwSignal::new(earlier()),
+            rescued: RwSignal::new(earlier(&aside)),
             stamp: StoredValue::new(store::read(STAMP)),
+            aside: StoredValue::new(aside),
             typing: StoredValue::new(None),
         };
         let Some(text) = store::read(SHEET) else {
@@ -159,22 +169,23 @@ impl Keeping {
     pub(super) fn keep(self, document: &Document) {
         let text = file::write(document);
         let kept = if self.is_other_tab_ahead() {
-            store::write(ASIDE, &text)
+            self.write_aside(&text)
         } else {
             self.write_sheet(&text)
         };
-        self.store.set(match kept {
-            Ok(()) => Store::Kept(clock::time_of_day()),
-            Err(why) => Store::Refused(why),
-        });
+        self.store.set(kept.unwrap_or_else(Store::Refused));
         self.remember_file(document);
     }
 
     /// Goes on with this tab's sheet.
     pub(super) fn keep_this(self, document: &Document) {
+        let theirs = self.elsewhere.get_untracked();
+        if let Some(theirs) = theirs.filter(|theirs| *theirs != file::write(document)) {
+            // The other tab may be closed: then nothing else holds its sheet. A full store is said by what follows.
+            let _ = store::write(REPLACED, &theirs);
+        }
         self.is_up_to_date();
         self.keep(document);
-        store::remove(ASIDE);
     }
 
     /// The other tab's sheet, to go on with.
@@ -183,7 +194,6 @@ impl Keeping {
         let read = file::read(&text);
         if read.is_ok() {
             self.is_up_to_date();
-            store::remove(ASIDE);
         }
         Some(read)
     }
@@ -195,6 +205,8 @@ impl Keeping {
                 name,
                 document: Some(document.clone()),
             });
+            let forgotten = files.len().saturating_sub(FILES_KNOWN);
+            files.drain(..forgotten);
         });
         self.remember_file(&document);
     }
@@ -204,14 +216,17 @@ impl Keeping {
         self.files.with(|files| file_of(files, document))
     }
 
-    /// Whether leaving the page now would lose something.
+    /// Whether leaving the page now would lose something, or leave a choice between two tabs' sheets open.
     pub(super) fn would_lose(self, document: &Document) -> bool {
-        let is_refused = matches!(self.store.try_get_untracked(), Some(Store::Refused(_)))
-            && !document.sheet.is_empty();
+        let is_open = match self.store.try_get_untracked() {
+            Some(Store::Refused(_)) => !document.sheet.is_empty(),
+            Some(Store::Aside(_)) => true,
+            Some(Store::Untouched | Store::Kept(_)) | None => false,
+        };
         let is_filed = self
             .files
             .try_with_untracked(|files| matches!(file_of(files, document), Some((_, true))));
-        is_refused && is_filed != Some(true)
+        is_open && is_filed != Some(true)
     }
 
     /// The document is about to be replaced by another one: it is kept where no file has it.
@@ -234,9 +249,10 @@ impl Keeping {
     /// The person is done with what could not be opened.
     pub(super) fn drop_rescued(self) {
         if let Some(rescued) = self.rescued.get_untracked() {
-            store::remove(rescued.key);
+            store::remove(&rescued.key);
         }
-        self.rescued.set(earlier());
+        self.rescued
+            .set(self.aside.with_value(|aside| earlier(aside)));
     }
 
     /// Keeps a text which is being typed, a frame later, so that typing never waits for the store.
@@ -261,12 +277,23 @@ impl Keeping {
         store::remove(TYPING);
     }
 
-    fn write_sheet(self, text: &str) -> Result<(), NotKept> {
+    fn write_sheet(self, text: &str) -> Result<Store, NotKept> {
         store::write(SHEET, text)?;
         let stamp = clock::stamp();
         store::write(STAMP, &stamp)?;
         self.stamp.set_value(Some(stamp));
-        Ok(())
+        // Only now: until the sheet is written, what was put aside is the newest.
+        self.aside.with_value(|aside| store::remove(aside));
+        panic::offer(SHEET);
+        Ok(Store::Kept(clock::time_of_day()))
+    }
+
+    fn write_aside(self, text: &str) -> Result<Store, NotKept> {
+        self.aside.with_value(|aside| {
+            panic::offer(aside);
+            store::write(aside, text)
+        })?;
+        Ok(Store::Aside(clock::time_of_day()))
     }
 
     /// Whether another tab wrote the sheet since this one did; then its text is held for the person to choose.
@@ -297,6 +324,7 @@ impl Keeping {
             return;
         };
         if store::write(key, &text).is_ok() {
+            let key = key.to_owned();
             self.rescued.set(Some(Rescued { key, text, why }));
             store::remove(SHEET);
             store::remove(FILED);
@@ -304,6 +332,10 @@ impl Keeping {
     }
 
     fn remember_file(self, document: &Document) {
+        if self.elsewhere.with_untracked(Option::is_some) {
+            // The kept name belongs to the kept sheet, and that is another tab's.
+            return;
+        }
         let known = self.files.with_untracked(|files| file_of(files, document));
         if let Some((name, is_same)) = known {
             let state = if is_same { SAME } else { CHANGED };
@@ -341,16 +373,25 @@ fn file_of(files: &[Filed], document: &Document) -> Option<(String, bool)> {
     Some((known.name.clone(), holding.is_some()))
 }
 
-fn earlier() -> Option<Rescued> {
-    let rescued = RESCUED.map(|key| (key, NotOpened::Earlier));
-    let replaced = [(REPLACED, NotOpened::Replaced)];
-    rescued.into_iter().chain(replaced).find_map(|(key, why)| {
-        Some(Rescued {
-            key,
-            text: store::read(key)?,
-            why,
+/// A text which waits for the person from an earlier start; not what this tab puts aside itself.
+fn earlier(own_aside: &str) -> Option<Rescued> {
+    let rescued = RESCUED.map(|key| (key.to_owned(), NotOpened::Earlier));
+    let aside = store::keys(ASIDE)
+        .into_iter()
+        .filter(|key| key != own_aside)
+        .map(|key| (key, NotOpened::Aside));
+    let replaced = [(REPLACED.to_owned(), NotOpened::Replaced)];
+    rescued
+        .into_iter()
+        .chain(aside)
+        .chain(replaced)
+        .find_map(|(key, why)| {
+            Some(Rescued {
+                text: store::read(&key)?,
+                key,
+                why,
+            })
         })
-    })
 }
 
 /// The document with the text which was being typed when the page ended, kept beside its place.

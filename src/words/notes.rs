@@ -126,6 +126,28 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
             "UL 508A, Table 28.1 gives ampacities inside for copper alone.",
             "Choose copper, or let the run lie in the field.",
         ),
+        NoteKind::NoCellInColumn { run: which, column } => said(
+            format!(
+                "No ampacity is printed for conductors in parallel {} in the {} °C column.",
+                run_where(*which),
+                column.to_celsius().round()
+            ),
+            "UL 508A, Table 28.1 ends that column at 1 AWG, and conductors in parallel start at 1/0 AWG (NEC 2023, 310.10(G)).",
+            "Enter one set, or the mark of the terminals where it is 75 °C.",
+        ),
+        NoteKind::LengthMissing { run: which } => said(
+            format!(
+                "The voltage drop is open: the length {} is missing.",
+                run_where(*which)
+            ),
+            "A drop of one run alone would read as the drop of both.",
+            "Enter the length one way.",
+        ),
+        NoteKind::SourceUnknown => said(
+            "Whether the source asks for input reactors is open.",
+            "Two of the reasons of practice go by the power and the impedance of the source, and no transformer is entered.",
+            "Enter the transformer; a fault current alone answers for the impedance, not for the power.",
+        ),
         NoteKind::ConductorTooSmall {
             run: which,
             entered,
@@ -178,7 +200,7 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
         ),
         NoteKind::InsideAirDecides { run: which, air } => said(
             format!(
-                "The hot air inside, {}, decided the size of the {}.",
+                "The hot air inside, up to {}, decided the size of the {}.",
                 quantity(*air, system),
                 run(*which)
             ),
@@ -412,6 +434,32 @@ pub fn note(note: &MarginNote, system: UnitSystem) -> NoteWords {
             "The supply voltage is missing.",
             "Currents, conductors and devices all follow from it; until it is entered nothing is sized.",
             "Enter the voltage between lines of the supply.",
+        ),
+        NoteKind::StandbyLarger { tags } => said(
+            format!(
+                "{} {} by and would ask for more than what runs.",
+                subject(tags),
+                verb(tags, "stands", "stand")
+            ),
+            "Incoming conductors and main device are worked for what runs together; the largest set that can run at one time decides (NEC 2023, 409.20, 430.24).",
+            "Let the larger one run together and its partner stand by, or answer why it never runs.",
+        ),
+        NoteKind::WallRuleNearLimit { inside, limit } => {
+            let (inside, limit) = quantities_apart(*inside, *limit, system);
+            said(
+                format!("The air inside, {inside}, is within {limit} only by a rule of thumb."),
+                "The wall coefficient stands for a rise near 30 K at sea level; at a smaller rise, or in thinner air, the walls carry up to a fifth less.",
+                "Leave more room below the limit, or measure.",
+            )
+        }
+        NoteKind::OtherLoadsAtCurrent { names } => said(
+            format!(
+                "{} {} counted at the current entered.",
+                subject(names),
+                verb(names, "is", "are")
+            ),
+            "Heaters take 125 % in the incoming conductors (NEC 2023, 409.20).",
+            "For a heater, enter 125 % of its current.",
         ),
         NoteKind::FaultCurrentUnknown => said(
             "The fault current at the panel is not known.",

@@ -76,6 +76,10 @@ pub fn size_found(conductors: &Conductors, system: UnitSystem) -> String {
         ConductorChoice::NoTable => {
             "No size is given: aluminium inside the enclosure has no table.".to_owned()
         }
+        ConductorChoice::NoCell { column } => format!(
+            "No size is given: the {} °C column has no cell for conductors in parallel.",
+            column.celsius()
+        ),
     }
 }
 

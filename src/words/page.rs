@@ -242,6 +242,7 @@ texts! {
 
     // Where the sheet is kept.
     saved_here = "Saved in this browser";
+    kept_aside = "Kept beside the other tab's sheet until you choose";
     not_kept_here = "Not kept in this browser";
     saving = "Saving in this browser";
     not_in_file = "Not yet in a file";
@@ -254,6 +255,7 @@ texts! {
     save_kept_text = "Save what was kept as a file";
     rescued_earlier = "A sheet which could not be opened earlier is still kept in this browser.";
     rescued_replaced = "A sheet which you replaced by another one is in no file, and is still kept in this browser.";
+    rescued_aside = "A sheet which was worked on while another tab had changed it is still kept in this browser, beside the other tab's.";
     rescued_drop = "I do not need it any more";
     other_tab = "This sheet was changed in another tab. Nothing is lost: choose which of the two to go on with.";
     other_tab_take = "Take the other tab's sheet";

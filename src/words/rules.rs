@@ -50,6 +50,9 @@ pub fn rule_title(rule: &Rule) -> &'static str {
         "physics.circuit.apparent_power" => "Apparent power of the drive's input",
         "sizing.reactor.source_ratio" => "Power of the source over that of the drive",
         "physics.circuit.impedance_on_base" => "Source impedance on the drive's base",
+        "physics.circuit.impedance_of_fault_current" => {
+            "Source impedance on the drive's base, from the fault current"
+        }
         "physics.circuit.reactor_inductance" => "Inductance of each phase of the reactor",
         "sizing.reactor.rated_current" => "Smallest rated current of the reactor",
         "physics.heat.reactor_loss_by_motor" => "Heat of the reactor, by motor power",

@@ -384,7 +384,8 @@ fn ratio_unit(rule: &Rule) -> Unit {
         | "sizing.device.time_delay_percentage"
         | "sizing.device.nontime_delay_percentage"
         | "sizing.device.breaker_percentage"
-        | "physics.circuit.impedance_on_base" => Unit::PerCent,
+        | "physics.circuit.impedance_on_base"
+        | "physics.circuit.impedance_of_fault_current" => Unit::PerCent,
         _ => Unit::One,
     }
 }

@@ -3,15 +3,15 @@
 use super::WorkedFeeder;
 use crate::assume::{AssumedValue, Assumption, FeederInputs, Site, feeder as filled};
 use crate::math::reaches;
-use crate::quantity::{Current, Power, Ratio, Temperature, Voltage};
+use crate::quantity::{Current, Power, Ratio, Temperature};
 use crate::sheet::Item;
-use crate::sizing::conductor::{Conductors, Demand, demand_of, size_run};
+use crate::sizing::conductor::{Conductors, demand_of, size_run};
 use crate::sizing::current::{DriveInputBasis, drive_input, motor_full_load};
 use crate::sizing::device::{Device, DeviceInput, disconnect, size_branch_device};
 use crate::sizing::grounding::grounding_of;
 use crate::sizing::heat::{FeederHeat, device_loss, drive_loss, loss_inside, sum_of_heats};
 use crate::sizing::panel::FeederLoad;
-use crate::sizing::reactor::{Reactor, ReactorInput, reactor_of};
+use crate::sizing::reactor::{Reactor, ReactorInput, Reference, reactor_of};
 use crate::sizing::rules;
 use crate::working::{
     Amount, Field, Figure, Given, Grade, Holder, HolderId, Ink, MarginNote, NoteKind, Place, Run,
@@ -122,7 +122,7 @@ fn parts_of(inputs: &FeederInputs, site: &Site, notes: &mut Vec<MarginNote>) -> 
         return Parts::default();
     }
     let Some(supply) = &site.supply else {
-        return Parts::default();
+        return unsupplied(inputs, notes);
     };
     let voltage = &supply.voltage;
     let motor_current = motor_full_load(
@@ -138,7 +138,7 @@ fn parts_of(inputs: &FeederInputs, site: &Site, notes: &mut Vec<MarginNote>) -> 
                 power: inputs.motor_power.as_ref(),
                 motor_current,
                 voltage,
-                smoothing: smoothing(inputs),
+                smoothing: smoothing(inputs, motor_current),
             },
             notes,
         ),
@@ -146,11 +146,11 @@ fn parts_of(inputs: &FeederInputs, site: &Site, notes: &mut Vec<MarginNote>) -> 
     };
     let mut ahead = drive_input.as_ref().and_then(|current| {
         let demand = demand_of(&rules::INPUT_AMPACITY, "I_in", current);
-        size(&inputs.ahead, &demand, voltage, notes)
+        size_run(&inputs.ahead, &demand, voltage, notes)
     });
     let mut behind = motor_current.as_ref().and_then(|current| {
         let demand = demand_of(&rules::OUTPUT_AMPACITY, "I_m", current);
-        size(&inputs.behind, &demand, voltage, notes)
+        size_run(&inputs.behind, &demand, voltage, notes)
     });
     let device = motor_current.as_ref().map(|motor_current| {
         size_branch_device(
@@ -197,21 +197,43 @@ fn parts_of(inputs: &FeederInputs, site: &Site, notes: &mut Vec<MarginNote>) -> 
     }
 }
 
-/// The larger of the drive's choke and the entered reactor.
-fn smoothing(inputs: &FeederInputs) -> Ratio {
-    match &inputs.reactor {
-        Some(reactor) if reactor.value > inputs.choke.value => reactor.value,
-        _ => inputs.choke.value,
+/// Without a supply voltage nothing is sized, but what is known of the heat counts.
+fn unsupplied(inputs: &FeederInputs, notes: &mut Vec<MarginNote>) -> Parts {
+    let nothing = HeatBasis {
+        drive_input: None,
+        device: None,
+        reactor: &Reactor::default(),
+        runs: [None, None],
+    };
+    let heat = heat_of(inputs, &nothing, notes);
+    Parts {
+        heat,
+        ..Parts::default()
     }
 }
 
-fn size(
-    input: &crate::sizing::conductor::RunInput,
-    demand: &Demand,
-    voltage: &Given<Voltage>,
-    notes: &mut Vec<MarginNote>,
-) -> Option<Conductors> {
-    size_run(input, demand, voltage, notes)
+/// The larger of the drive's choke and the entered reactor, on a base not above the drive's input current.
+///
+/// A percentage of the motor's current is at least as much of the drive's; one of another current is brought to the
+/// motor's, so that no reactor counts for more than it is.
+fn smoothing(inputs: &FeederInputs, motor_current: &Given<Current>) -> Ratio {
+    let reactor = inputs
+        .reactor
+        .as_ref()
+        .map(|percent| match inputs.reference {
+            Reference::DriveInput | Reference::MotorCurrent => percent.value,
+            Reference::Own => match &inputs.own_reference {
+                Some(own) if own.value > motor_current.value => {
+                    percent.value * (motor_current.value / own.value)
+                }
+                Some(_) => percent.value,
+                None => Ratio::of_one(0.0),
+            },
+        });
+    match reactor {
+        Some(reactor) if reactor > inputs.choke.value => reactor,
+        _ => inputs.choke.value,
+    }
 }
 
 fn device_input(
@@ -254,11 +276,19 @@ fn drop_of_both(
     behind: Option<&Conductors>,
     notes: &mut Vec<MarginNote>,
 ) -> Option<Arc<Figure>> {
-    let parts: Vec<&Arc<Figure>> = [ahead, behind]
-        .into_iter()
-        .flatten()
-        .filter_map(|conductors| conductors.drop_ratio.as_ref())
-        .collect();
+    let runs: Vec<&Conductors> = [ahead, behind].into_iter().flatten().collect();
+    for run in &runs {
+        if run.input.length.is_none() {
+            let part = Field::Run(run.input.run, RunField::Length);
+            let kind = NoteKind::LengthMissing { run: run.input.run };
+            notes.push(MarginNote::new(Grade::Query, part, kind));
+        }
+    }
+    // The drop of one run alone would read as that of both.
+    let parts: Vec<&Arc<Figure>> = runs
+        .iter()
+        .map(|conductors| conductors.drop_ratio.as_ref())
+        .collect::<Option<_>>()?;
     if parts.is_empty() {
         return None;
     }

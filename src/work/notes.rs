@@ -7,13 +7,14 @@ use crate::assume::SheetInputs;
 use crate::math::reaches;
 use crate::quantity::{Current, Ratio, Temperature};
 use crate::sheet::{Item, Sheet};
-use crate::sizing::conductor::{Conductors, cells_from_memory};
+use crate::sizing::conductor::{Conductors, Surrounding, cells_from_memory};
 use crate::sizing::panel::IncomingCircuit;
+use crate::sizing::reactor::ANSWERING_CHOKE;
 use crate::tables::DeviceType;
 use crate::tables::device_losses::{breaker_pole, fuse_link};
 use crate::tables::nec_chapter_9::area;
 use crate::working::{
-    Field, Given, Grade, Holder, MarginNote, MemoryTable, NoteKind, Place, RunField,
+    Field, Given, Grade, Holder, HolderId, MarginNote, MemoryTable, NoteKind, Place, RunField,
 };
 use std::collections::BTreeMap;
 use std::sync::Arc;
@@ -34,7 +35,10 @@ pub(super) fn note_sheet(
         );
     }
     let has_load = |feeder: &Feeder| {
-        feeder.worked.motor_current.is_some() || feeder.worked.drive_input.is_some()
+        let inputs = &feeder.inputs;
+        inputs.motor_power.is_some()
+            || inputs.motor_current.is_some()
+            || inputs.drive_input.is_some()
     };
     let uncounted = tags(feeders, |feeder| {
         let is_counted = feeder
@@ -60,6 +64,7 @@ pub(super) fn note_sheet(
         has_load(feeder)
             && (heat.drive.is_none()
                 || heat.device.is_none()
+                || feeder.worked.runs().any(is_inside_without_heat)
                 || (has_reactor && heat.reactor.is_none()))
     };
     let drives = u32::try_from(
@@ -88,8 +93,59 @@ pub(super) fn note_sheet(
         (Grade::Query, Field::DriveLoss),
         |tags| NoteKind::LedgerIncomplete { tags },
     ));
+    notes.extend(at_first(
+        feeders,
+        |feeder| stands_by_larger(feeder, feeders, incoming),
+        (Grade::Query, Field::Running),
+        |tags| NoteKind::StandbyLarger { tags },
+    ));
+    if has_unknown_source(inputs, feeders) {
+        notes.push(MarginNote::new(
+            Grade::Query,
+            Field::TransformerPower,
+            NoteKind::SourceUnknown,
+        ));
+    }
     notes.extend(repeated_tags(feeders));
     notes.extend(memory_notes(inputs, feeders, incoming));
+}
+
+/// Whether a feeder stands by which would ask for more than the one it could replace: its drive takes more than the
+/// largest which runs, or its branch device is above the main device.
+fn stands_by_larger(feeder: &Feeder, feeders: &[Feeder], incoming: &IncomingCircuit) -> bool {
+    let Some(load) = feeder.load.as_ref().filter(|load| !load.is_running) else {
+        return false;
+    };
+    let largest_running = feeders
+        .iter()
+        .filter_map(|other| other.load.as_ref().filter(|other| other.is_running))
+        .map(|other| other.drive_input.value)
+        .fold(Current::amperes(0.0), |a, b| if b > a { b } else { a });
+    let main = incoming.main.as_ref().and_then(|main| main.rating.as_ref());
+    let branch = feeder
+        .worked
+        .device
+        .as_ref()
+        .and_then(|device| device.rating.as_ref());
+    let is_above_main = main
+        .zip(branch)
+        .is_some_and(|(main, branch)| branch.value > main.value);
+    load.drive_input.value > largest_running || is_above_main
+}
+
+/// Whether reasons of practice for a reactor stay open: no transformer is entered, and some drive has no choke which
+/// would answer them.
+fn has_unknown_source(inputs: &SheetInputs, feeders: &[Feeder]) -> bool {
+    inputs.transformer.is_none()
+        && inputs.site.supply.is_some()
+        && feeders
+            .iter()
+            .any(|feeder| feeder.load.is_some() && feeder.inputs.choke.value < ANSWERING_CHOKE)
+}
+
+/// Whether a run inside could not be sized, so that its heat is missing.
+fn is_inside_without_heat(conductors: &Conductors) -> bool {
+    matches!(conductors.input.surrounding, Surrounding::Inside { .. }) && conductors.heat.is_none()
 }
 
 /// One note about several feeders, at the first of them; `None` where there are none.
@@ -295,17 +351,19 @@ fn governing_air(
 
 /// Stops first; within a grade the sheet's own notes, then the feeders' in their order, then the sources'.
 pub(super) fn in_order(mut notes: Vec<MarginNote>, sheet: &Sheet) -> Vec<MarginNote> {
-    let place_of = |items: &[Arc<Item>], id| {
+    let places = |items: &[Arc<Item>]| -> BTreeMap<HolderId, usize> {
         items
             .iter()
-            .position(|item| item.id == id)
-            .unwrap_or(usize::MAX)
+            .enumerate()
+            .map(|(position, item)| (item.id, position))
+            .collect()
     };
+    let (feeders, sources) = (places(&sheet.feeders), places(&sheet.sources));
     notes.sort_by_key(|note| {
         let (group, position) = match note.place.holder {
-            Holder::Sheet => (0, 0),
-            Holder::Feeder(id) => (1, place_of(&sheet.feeders, id)),
-            Holder::Source(id) => (2, place_of(&sheet.sources, id)),
+            Holder::Sheet => (0, None),
+            Holder::Feeder(id) => (1, feeders.get(&id).copied()),
+            Holder::Source(id) => (2, sources.get(&id).copied()),
         };
         (note.grade, group, position)
     });

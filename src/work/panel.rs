@@ -5,12 +5,11 @@ use super::{WorkedFeeder, WorkedSource};
 use crate::assume::SheetInputs;
 use crate::quantity::{Current, Power};
 use crate::sizing::fault::{Fault, FaultInput, FaultRunInput, fault_at_panel};
-use crate::sizing::grounding::grounding_of;
 use crate::sizing::heat::device_loss;
 use crate::sizing::panel::{
     FeederLoad, IncomingCircuit, IncomingInput, OtherLoad, incoming_circuit,
 };
-use crate::working::{Field, Given, Grade, Holder, MarginNote, NoteKind};
+use crate::working::{Field, Given, Grade, Holder, MarginNote, NoteKind, Run, RunField};
 
 /// The short-circuit ratings inside as entered.
 #[derive(Debug, Clone, PartialEq)]
@@ -21,7 +20,7 @@ pub(super) struct Ratings {
     pub(super) is_complete: bool,
 }
 
-/// Works the incoming circuit.
+/// Works the incoming circuit. Its grounding conductor follows the device ahead of it, which the sheet does not know.
 pub(super) fn incoming_of(
     inputs: &SheetInputs,
     feeders: &[Feeder],
@@ -45,7 +44,7 @@ pub(super) fn incoming_of(
             })
         })
         .collect();
-    let mut incoming = incoming_circuit(
+    incoming_circuit(
         &IncomingInput {
             feeders: loads,
             others,
@@ -56,12 +55,7 @@ pub(super) fn incoming_of(
             edition: inputs.site.basis.edition(),
         },
         notes,
-    );
-    let rating = incoming.main.as_ref().and_then(|main| main.rating.clone());
-    if let (Some(conductors), Some(rating)) = (&mut incoming.conductors, rating) {
-        conductors.grounding = grounding_of(conductors, &rating, notes);
-    }
-    incoming
+    )
 }
 
 /// Loss of the main device: as entered, else assumed from its limit at the running current.
@@ -70,17 +64,15 @@ pub(super) fn main_loss(
     incoming: &IncomingCircuit,
     notes: &mut Vec<MarginNote>,
 ) -> Option<Given<Power>> {
+    if inputs.main_loss.is_some() {
+        return inputs.main_loss.clone();
+    }
     let main = incoming.main.as_ref()?;
     let (rating, current) = (
         main.rating.as_ref()?,
         Given::from_figure(incoming.running.as_ref()?)?,
     );
-    let (loss, _) = device_loss(
-        inputs.main_loss.clone(),
-        main.device.value,
-        rating,
-        &current,
-    );
+    let (loss, _) = device_loss(None, main.device.value, rating, &current);
     if loss.is_none() {
         notes.push(MarginNote::new(
             Grade::Query,
@@ -114,15 +106,18 @@ pub(super) fn fault_of(
         .as_ref()
         .and_then(|conductors| conductors.installed())
         .or(run.size);
-    let run = size
-        .zip(run.length.clone())
-        .map(|(size, length)| FaultRunInput {
+    let part = |part| Field::Run(Run::Incoming, part);
+    let run = match (size, run.length.clone()) {
+        (Some(size), Some(length)) => Ok(FaultRunInput {
             size,
             metal: run.metal.value,
             conduit: run.conduit.value,
             sets: run.sets.clone(),
             length,
-        });
+        }),
+        (_, None) => Err(part(RunField::Length)),
+        (None, _) => Err(part(RunField::Size)),
+    };
     if inputs.source_fault.is_none()
         && inputs.transformer.is_some()
         && !inputs.impedance.is_entered()

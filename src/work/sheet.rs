@@ -9,12 +9,13 @@ use super::totals::{Findings, Gaps, totals_of};
 use super::{Ledger, Worked, WorkedEnclosure, WorkedSource};
 use crate::assume::{SheetInputs, Site, SourceInputs, site, source};
 use crate::math::reaches;
-use crate::quantity::{Power, Temperature};
+use crate::quantity::{Current, Power, Temperature};
 use crate::sheet::{Item, Sheet};
+use crate::sizing::air::Air;
 use crate::sizing::heat::source_heat;
 use crate::sizing::panel::IncomingCircuit;
 use crate::sizing::rules;
-use crate::working::{Field, Given, Grade, Holder, MarginNote, NoteKind, Term};
+use crate::working::{Field, Figure, Given, Grade, Holder, MarginNote, NoteKind, Term};
 use std::collections::BTreeMap;
 use std::sync::Arc;
 
@@ -91,14 +92,7 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
         settled.enclosure.air.inside.as_ref(),
         &mut notes,
     );
-    for (worked, source_inputs) in &sources {
-        if worked.heat.is_none() {
-            let note =
-                MarginNote::new(Grade::Query, Field::SourceHeat, NoteKind::SourceHeatUnknown);
-            notes.push(note.held_by(Holder::Source(worked.id)));
-        }
-        debug_assert_eq!(worked.name, source_inputs.name);
-    }
+    notes.extend(source_notes(&worked_sources));
     notes.extend(
         settled
             .feeders
@@ -156,6 +150,34 @@ fn work_with(sheet: &Sheet, memory: &Memory) -> Worked {
     }
 }
 
+/// Sources without heat, and other loads, which count at their current while a heater would ask for more.
+fn source_notes(sources: &[WorkedSource]) -> Vec<MarginNote> {
+    let mut notes: Vec<MarginNote> = sources
+        .iter()
+        .filter(|source| source.heat.is_none())
+        .map(|source| {
+            MarginNote::new(Grade::Query, Field::SourceHeat, NoteKind::SourceHeatUnknown)
+                .held_by(Holder::Source(source.id))
+        })
+        .collect();
+    let is_load = |source: &&WorkedSource| {
+        source
+            .current
+            .as_ref()
+            .is_some_and(|current| current.value > Current::amperes(0.0))
+    };
+    let loads: Vec<&WorkedSource> = sources.iter().filter(is_load).collect();
+    if let Some(first) = loads.first() {
+        let names = loads.iter().map(|source| source.name.clone()).collect();
+        let kind = NoteKind::OtherLoadsAtCurrent { names };
+        notes.push(
+            MarginNote::new(Grade::Note, Field::SourceCurrent, kind)
+                .held_by(Holder::Source(first.id)),
+        );
+    }
+    notes
+}
+
 fn work_source(item: &Item) -> (WorkedSource, SourceInputs) {
     let inputs = source(item);
     let worked = WorkedSource {
@@ -204,11 +226,14 @@ fn settle(
 ) -> Settled {
     let work = |band| work_for(sheet, inputs, sources, band, memory);
     // A limit held by fans does not depend on the heat: its band is the solution.
+    let room = inputs.site.ambient.value;
     if inputs.enclosure.is_ventilated {
-        return work(Some(band_of(inputs.enclosure.limit.value)));
+        let limit = inputs.enclosure.limit.value;
+        return work(Some(band_of(if room > limit { room } else { limit })));
     }
+    // Until the walls are known, the air inside is at least as warm as the room.
     if inputs.enclosure.measures.is_none() {
-        return work(None);
+        return work(Some(band_of(room)));
     }
     if let Some(settled) = settled_as_before(memory, &work) {
         return settled;
@@ -256,12 +281,16 @@ fn keep_warmer_end(settled: &mut Settled, cooler_edge: Option<Temperature>) {
     else {
         return;
     };
-    let air = &mut settled.enclosure.air;
-    let exact = air.inside.as_ref().map(|inside| inside.term("by heat"));
-    let mut terms: Vec<Term> = exact.into_iter().collect();
-    terms.push(Term::constant("edge", edge));
-    let figure = Arc::new(rules::AIR_LOOP_END.figure(edge, terms));
-    air.inside = Given::from_figure(&figure);
+    let figure = lifted(&mut settled.enclosure.air, edge);
+    // Everything connected is never cooler than what runs together.
+    let connected = &mut settled.enclosure.air_connected;
+    if connected
+        .inside
+        .as_ref()
+        .is_some_and(|inside| inside.value < edge)
+    {
+        lifted(connected, edge);
+    }
     settled.notes.push(
         MarginNote::new(
             Grade::Note,
@@ -270,6 +299,16 @@ fn keep_warmer_end(settled: &mut Settled, cooler_edge: Option<Temperature>) {
         )
         .about(&figure),
     );
+}
+
+/// Puts the air inside at `edge`, with what its heat alone would give in the working.
+fn lifted(air: &mut Air, edge: Temperature) -> Arc<Figure> {
+    let exact = air.inside.as_ref().map(|inside| inside.term("by heat"));
+    let mut terms: Vec<Term> = exact.into_iter().collect();
+    terms.push(Term::constant("edge", edge));
+    let figure = Arc::new(rules::AIR_LOOP_END.figure(edge, terms));
+    air.inside = Given::from_figure(&figure);
+    figure
 }
 
 fn work_for(

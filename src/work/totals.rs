@@ -38,6 +38,7 @@ impl Gaps {
                 matches!(
                     kind,
                     NoteKind::LedgerIncomplete { .. }
+                        | NoteKind::SunMissing
                         | NoteKind::DeviceLossUnknown { .. }
                         | NoteKind::SourceHeatUnknown
                 )

@@ -116,7 +116,8 @@ pub fn sum_of_terms(terms: &[Term]) -> f64 {
             Amount::Measured { si, .. } => Some(si),
             Amount::Count(_) | Amount::Size(_) => None,
         })
-        .sum()
+        // Not `sum`: that of nothing is minus nought.
+        .fold(0.0, |sum, part| sum + part)
 }
 
 /// One worked (or assumed) value with its working: a tree whose leaves are entered and assumed values.

@@ -83,6 +83,12 @@ pub enum NoteKind {
     AmbientBeyondInsulation { run: Run, ambient: Temperature },
     /// Aluminium inside the enclosure: Table 28.1 has none.
     AluminiumInside { run: Run },
+    /// The table has no cell in the terminals' column for conductors in parallel.
+    NoCellInColumn { run: Run, column: Temperature },
+    /// The length of a run is missing: no drop is worked.
+    LengthMissing { run: Run },
+    /// Without a transformer it is open whether the source asks for reactors.
+    SourceUnknown,
     /// The size entered is smaller than the rules ask for.
     ConductorTooSmall {
         run: Run,
@@ -166,6 +172,15 @@ pub enum NoteKind {
     ImpedanceAssumed { assumed: Ratio },
     /// The supply voltage is missing: nothing can be sized.
     SupplyVoltageMissing,
+    /// These stand by, and ask for more than what runs: the incoming circuit does not hold for them.
+    StandbyLarger { tags: Vec<String> },
+    /// The sealed rise is by a rule which stands for 30 K at sea level: near the limit that decides.
+    WallRuleNearLimit {
+        inside: Temperature,
+        limit: Temperature,
+    },
+    /// Other loads are counted at their current: heaters would take 125 per cent.
+    OtherLoadsAtCurrent { names: Vec<String> },
     /// Transformer or voltage is missing: no fault current.
     FaultCurrentUnknown,
     /// The incoming run is missing: the fault current is that at its start.
@@ -232,6 +247,9 @@ impl NoteKind {
             NoteKind::NoConductorFits { .. } => "no-conductor-fits",
             NoteKind::AmbientBeyondInsulation { .. } => "ambient-beyond-insulation",
             NoteKind::AluminiumInside { .. } => "aluminium-inside",
+            NoteKind::NoCellInColumn { .. } => "no-cell-in-column",
+            NoteKind::LengthMissing { .. } => "length-missing",
+            NoteKind::SourceUnknown => "source-unknown",
             NoteKind::ConductorTooSmall { .. } => "conductor-too-small",
             NoteKind::ParallelTooSmall { .. } => "parallel-too-small",
             NoteKind::SizeNotInTable { .. } => "size-not-in-table",
@@ -269,6 +287,9 @@ impl NoteKind {
             NoteKind::StandingBy { .. } => "standing-by",
             NoteKind::ImpedanceAssumed { .. } => "impedance-assumed",
             NoteKind::SupplyVoltageMissing => "supply-voltage-missing",
+            NoteKind::StandbyLarger { .. } => "standby-larger",
+            NoteKind::WallRuleNearLimit { .. } => "wall-rule-near-limit",
+            NoteKind::OtherLoadsAtCurrent { .. } => "other-loads-at-current",
             NoteKind::FaultCurrentUnknown => "fault-current-unknown",
             NoteKind::FaultRunUnknown => "fault-run-unknown",
             NoteKind::FaultConstantMissing { .. } => "fault-constant-missing",

@@ -243,7 +243,7 @@ fn work_panel(inputs: &Inputs) -> Result<Answers, String> {
         transformer: inputs.maybe::<ApparentPower>("power").map(given),
         impedance: given(impedance),
         is_measured,
-        run: Some(FaultRunInput {
+        run: Ok(FaultRunInput {
             size: inputs.size("size")?,
             metal: metal(inputs),
             conduit: conduit(inputs),

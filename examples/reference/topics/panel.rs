@@ -300,6 +300,7 @@ fn work_reactor(inputs: &Inputs) -> Result<Answers, String> {
         frequency: given(inputs.measured::<Frequency>("frequency")?),
         power: inputs.maybe::<ApparentPower>("source").map(given),
         impedance: given(inputs.measured_or("source_impedance", Ratio::per_cent(5.75))),
+        fault: None,
         unbalance: given(inputs.measured_or("unbalance", none)),
         has_capacitors: false,
         has_surges: false,

@@ -1,6 +1,6 @@
 //! The choice of a size: each size is tried from the smallest up.
 
-use super::ampacity::{SizeFailure, ampacities, usable};
+use super::ampacity::{SizeFailure, ampacities, terminal_column, usable};
 use super::{ConductorChoice, DecidedBy, Demand, Rejected, RunInput, Surrounding};
 use crate::math::reaches;
 use crate::quantity::{Current, WireSize};
@@ -105,15 +105,16 @@ pub(super) fn choose(
             Trial::Impossible(SizeFailure::NoCell) => {}
         }
     }
-    let largest = largest.unwrap_or(SMALLEST_PARALLEL);
-    let carries = usable(input, by_terminals, largest)
-        .and_then(|figure| figure.quantity())
-        .unwrap_or(Current::amperes(0.0));
-    ConductorChoice::NoneFits {
-        largest,
-        carries,
-        needed: by_terminals,
-    }
+    let column = terminal_column(input.terminal.value, by_terminals);
+    largest
+        .and_then(|largest| {
+            Some(ConductorChoice::NoneFits {
+                largest,
+                carries: usable(input, by_terminals, largest)?.quantity()?,
+                needed: by_terminals,
+            })
+        })
+        .unwrap_or(ConductorChoice::NoCell { column })
 }
 
 pub(super) fn installed_size(
@@ -151,7 +152,11 @@ pub(super) fn installed_size(
     ];
     match usable(input, needed, entered) {
         Some(figure) => terms.push(Term::of("I_u", &figure)),
-        None if *choice != ConductorChoice::NoTable && *choice != ConductorChoice::TooHot => {
+        None if !matches!(
+            choice,
+            ConductorChoice::NoTable | ConductorChoice::NoCell { .. } | ConductorChoice::TooHot
+        ) =>
+        {
             notes.push(MarginNote::new(
                 Grade::Stop,
                 field,

@@ -4,7 +4,7 @@ use super::ampacity::BASE_AMBIENT;
 use super::choice::{SMALLEST_PARALLEL, choose, smallest_wire};
 use super::{ConductorChoice, RunInput, Surrounding};
 use crate::math::reaches;
-use crate::quantity::{Current, WireSize};
+use crate::quantity::{Current, Temperature, WireSize};
 use crate::working::{Field, Figure, Grade, MarginNote, NoteKind, RunField};
 use std::sync::Arc;
 
@@ -44,6 +44,13 @@ pub(super) fn note_choice(
             )
         }
         ConductorChoice::NoTable => (RunField::Metal, NoteKind::AluminiumInside { run }),
+        ConductorChoice::NoCell { column } => (
+            RunField::Terminal,
+            NoteKind::NoCellInColumn {
+                run,
+                column: Temperature::celsius(f64::from(column.celsius())),
+            },
+        ),
     };
     notes.push(MarginNote::new(Grade::Stop, Field::Run(run, part), kind));
 }

@@ -127,6 +127,11 @@ pub enum ConductorChoice {
     TooHot,
     /// Aluminium inside the enclosure has no table.
     NoTable,
+    /// The table has no cell in this column for any conductor which may be used here.
+    NoCell {
+        /// The column of the terminals.
+        column: Column,
+    },
 }
 
 /// The conductors of a run, worked.
