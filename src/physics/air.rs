@@ -52,15 +52,6 @@ pub fn airflow(heat: Power, density: Density, rise: TemperatureDifference) -> Ai
     )
 }
 
-/// Mass of air for a time which carries a heat away: m = P / (cp * dT), kilograms a second.
-pub fn air_mass_flow_kg_s(
-    heat: Power,
-    specific_heat: SpecificHeat,
-    rise: TemperatureDifference,
-) -> f64 {
-    heat.to_watts() / (specific_heat.to_joules_per_kilogram_kelvin() * rise.to_kelvin())
-}
-
 /// Heat which is left for the air when the walls take their share at the same rise: P = P_i - G * dT, never below zero.
 pub fn heat_left_for_air(
     heat: Power,
@@ -82,9 +73,4 @@ pub fn airflow_by_metric_rule(heat: Power, rise: TemperatureDifference) -> AirFl
 /// Exact for dry sea-level air near 21 °C.
 pub fn airflow_by_us_rule(heat: Power, rise: TemperatureDifference) -> AirFlow {
     AirFlow::cubic_feet_per_minute(3.16 * heat.to_watts() / rise.to_fahrenheit_degrees())
-}
-
-/// Constant C of the rule V = C * P / dT for air of a density: C = 1 / (rho * cp), cubic metres a second for W/K.
-pub fn airflow_constant(density: Density, specific_heat: SpecificHeat) -> f64 {
-    1.0 / (density.to_kilograms_per_cubic_metre() * specific_heat.to_joules_per_kilogram_kelvin())
 }

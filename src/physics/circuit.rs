@@ -112,21 +112,6 @@ pub fn reactive_factor(power_factor: Ratio) -> Ratio {
     Ratio::of_one((1.0 - cosphi * cosphi).max(0.0).sqrt())
 }
 
-/// Conductor area which keeps a drop, by the constant K of the metal.
-///
-/// A = sqrt(3) * K * I * L / dU for three phases, 2 instead of sqrt(3) for one; K in ohm circular mils a foot, I in
-/// amperes, L one way in feet, dU in volts: circular mils. K is 12.9 for copper at 75 °C.
-pub fn circular_mils_for_drop(
-    phases: Phases,
-    k_ohm_cmil_per_ft: f64,
-    current: Current,
-    length: Length,
-    drop: Voltage,
-) -> f64 {
-    phases.lengths_of_lines() * k_ohm_cmil_per_ft * current.to_amperes() * length.to_feet()
-        / drop.to_volts()
-}
-
 /// Inductance of each phase of a reactor of a percentage.
 ///
 /// L = z * U / (sqrt(3) * 2 * pi * f * I); z percentage as a ratio, U voltage between lines, f line frequency, I the

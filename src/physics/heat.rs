@@ -29,11 +29,6 @@ pub fn loss_by_square_of_current(paths: u32, loss: Power, rated: Current, real: 
     Power::watts(f64::from(paths) * loss.to_watts() * load * load)
 }
 
-/// Loss of current paths of known resistance: P = n * I * I * R; n paths, I current of each, R resistance in ohms.
-pub fn loss_by_resistance(paths: u32, current: Current, resistance_ohm: f64) -> Power {
-    Power::watts(f64::from(paths) * current.to_amperes() * current.to_amperes() * resistance_ohm)
-}
-
 /// Heat of the three conductors of a run: P = 3 * I * I * R * L / n; I line current, R resistance of one conductor for
 /// its length at working temperature, L length, n conductors in parallel for each phase.
 pub fn run_loss(
@@ -103,20 +98,4 @@ pub fn wall_conductance(coefficient: Transmittance, surface: Area) -> HeatConduc
 /// Rise of the air in a sealed enclosure by the linear rule: dT = P / G; P heat, G conductance of the walls.
 pub fn sealed_rise(heat: Power, conductance: HeatConductance) -> TemperatureDifference {
     heat / conductance
-}
-
-/// Heat through the walls: P = G * dT.
-pub fn wall_heat(conductance: HeatConductance, difference: TemperatureDifference) -> Power {
-    conductance * difference
-}
-
-/// Surface which a heat needs at a rise by the linear rule: A = P / (k * dT).
-pub fn surface_needed(
-    heat: Power,
-    coefficient: Transmittance,
-    rise: TemperatureDifference,
-) -> Area {
-    Area::square_metres(
-        heat.to_watts() / (coefficient.to_watts_per_square_metre_kelvin() * rise.to_kelvin()),
-    )
 }

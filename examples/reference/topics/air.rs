@@ -2,15 +2,14 @@
 
 use super::heat::drive_heat;
 use super::{Answers, Gathered, Inputs, Topic, Work, given};
-use crate::reference::keys::{Key, Takes, needed, optional};
+use crate::reference::keys::{Key, Takes, missing, needed, optional};
 use std::sync::Arc;
 use ventrail::physics::air::{
-    SPECIFIC_HEAT, air_mass_flow_kg_s, airflow, airflow_by_metric_rule, airflow_by_us_rule,
-    airflow_constant, dry_air_density, site_pressure,
+    SEA_LEVEL_PRESSURE, airflow, airflow_by_metric_rule, airflow_by_us_rule, dry_air_density,
+    site_pressure,
 };
 use ventrail::quantity::{
-    AirFlow, Density, Kind, Length, Power, Pressure, Quantity, SpecificHeat, Temperature,
-    TemperatureDifference,
+    Density, Kind, Length, Power, Pressure, Temperature, TemperatureDifference,
 };
 use ventrail::sizing::air::{AirInput, air_of};
 use ventrail::sizing::rules;
@@ -29,11 +28,6 @@ const RISE: Key = needed(
     "rise",
     Takes::Measured(Kind::TemperatureDifference),
     "of the air between inlet and outlet",
-);
-const SPECIFIC: Key = optional(
-    "specific_heat",
-    Takes::Measured(Kind::SpecificHeat),
-    "of air, else that of the sheet",
 );
 
 /// Air.
@@ -64,7 +58,7 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "airflow",
-        about: "Air to be moved through an enclosure, no credit for the walls: sizing::air::air_of; mass and outlet volume by physics::air.",
+        about: "Air to be moved through an enclosure, no credit for the walls: sizing::air::air_of; mass and outlet volume by physics::air::airflow and dry_air_density.",
         inputs: &[
             HEAT,
             needed(
@@ -159,23 +153,22 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "air mass flow",
-        about: "Mass of air which carries a heat: physics::air::air_mass_flow_kg_s.",
-        inputs: &[HEAT, RISE, SPECIFIC],
+        about: "Mass of air which carries a heat, the same at any density: that density times physics::air::airflow.",
+        inputs: &[HEAT, RISE],
         expected: &[needed(
             "mass_flow_kg_s",
             Takes::Number,
             "mass of air for a second",
         )],
         work: Work::Now(|inputs| {
-            let specific = inputs.measured_or("specific_heat", SPECIFIC_HEAT);
-            let mass =
-                air_mass_flow_kg_s(inputs.measured("heat")?, specific, inputs.measured("rise")?);
+            let density = dry_air_density(SEA_LEVEL_PRESSURE, Temperature::celsius(20.0));
+            let mass = mass_flow_kg_s(inputs.measured("heat")?, density, inputs.measured("rise")?);
             Gathered::default().number("mass_flow_kg_s", mass).done()
         }),
     },
     Topic {
         name: "airflow constant",
-        about: "The constant C of V = C P / dT for air of a temperature and pressure: physics::air::airflow_constant.",
+        about: "The constant C of V = C P / dT for air of a temperature and pressure: physics::air::airflow for one watt and one kelvin, with dry_air_density.",
         inputs: &[
             needed(
                 "temperature",
@@ -183,7 +176,6 @@ pub const TOPICS: &[Topic] = &[
                 "of the air",
             ),
             needed("pressure", Takes::Measured(Kind::Pressure), "of the air"),
-            SPECIFIC,
         ],
         expected: &[
             needed(
@@ -216,17 +208,21 @@ fn work_airflow(inputs: &Inputs) -> Result<Answers, String> {
     });
     let rise = outlet - inlet;
     let pressure: Option<Pressure> = air.pressure.as_ref().and_then(|figure| figure.quantity());
-    let at_outlet = pressure.map(|pressure| airflow(heat, dry_air_density(pressure, outlet), rise));
+    let pressure = pressure.ok_or_else(|| missing("altitude"))?;
+    let density = dry_air_density(pressure, outlet);
     Gathered::default()
-        .number(
-            "mass_flow_kg_s",
-            air_mass_flow_kg_s(heat, SPECIFIC_HEAT, rise),
-        )
+        .number("mass_flow_kg_s", mass_flow_kg_s(heat, density, rise))
         .figure("at_inlet", air.airflow.as_ref())
-        .quantity("at_outlet", at_outlet)
+        .quantity("at_outlet", Some(airflow(heat, density, rise)))
         .figure("metric_rule", air.airflow_metric_rule.as_ref())
         .figure("us_rule", air.airflow_us_rule.as_ref())
         .done()
+}
+
+/// Mass of the air which carries a heat: its volume with a density, times that density.
+fn mass_flow_kg_s(heat: Power, density: Density, rise: TemperatureDifference) -> f64 {
+    airflow(heat, density, rise).to_cubic_metres_per_second()
+        * density.to_kilograms_per_cubic_metre()
 }
 
 fn work_trade_rules(inputs: &Inputs) -> Result<Answers, String> {
@@ -246,9 +242,8 @@ fn work_constant(inputs: &Inputs) -> Result<Answers, String> {
         inputs.measured("pressure")?,
         inputs.measured("temperature")?,
     );
-    let specific: SpecificHeat = inputs.measured_or("specific_heat", SPECIFIC_HEAT);
-    let constant = AirFlow::from_si(airflow_constant(density, specific));
     let one_kelvin = TemperatureDifference::kelvin(1.0);
+    let constant = airflow(Power::watts(1.0), density, one_kelvin);
     Gathered::default()
         .number(
             "constant_m3_per_h_k_per_w",

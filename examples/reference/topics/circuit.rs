@@ -1,17 +1,15 @@
 //! Transformers and fault currents.
 
-use super::{
-    Answers, CONDUITS, Gathered, Inputs, METALS, PHASES, Topic, Work, conduit, given, metal, phases,
-};
+use super::{Answers, CONDUITS, Gathered, Inputs, METALS, Topic, Work, conduit, given, metal};
 use crate::reference::keys::{Key, Takes, missing, needed, optional};
 use ventrail::physics::circuit::{
-    FaultRun, run_factor, run_multiplier, share_of, transformer_current, transformer_fault_current,
+    FaultRun, Phases, run_factor, run_multiplier, share_of, transformer_current,
+    transformer_fault_current,
 };
 use ventrail::quantity::{ApparentPower, Current, Kind, Length, Ratio, Voltage};
 use ventrail::sizing::fault::{FaultInput, FaultRunInput, fault_at_panel};
 use ventrail::tables::fault_constants::fault_constant_row;
 
-const PHASE_COUNT: Key = optional("phases", Takes::Word(PHASES), "1: between lines; else 3");
 const POWER: Key = needed(
     "power",
     Takes::Measured(Kind::ApparentPower),
@@ -37,8 +35,8 @@ const COUNTED: Key = optional(
 pub const TOPICS: &[Topic] = &[
     Topic {
         name: "transformer current",
-        about: "Full-load current of a transformer: physics::circuit::transformer_current.",
-        inputs: &[POWER, VOLTAGE, PHASE_COUNT],
+        about: "Full-load current of a three-phase transformer: physics::circuit::transformer_current.",
+        inputs: &[POWER, VOLTAGE],
         expected: &[needed(
             "full_load",
             Takes::Measured(Kind::Current),
@@ -52,8 +50,8 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "transformer fault current",
-        about: "Fault current at a transformer from an infinite bus: physics::circuit::transformer_fault_current.",
-        inputs: &[POWER, VOLTAGE, IMPEDANCE, COUNTED, PHASE_COUNT],
+        about: "Three-phase fault current at a transformer from an infinite bus: physics::circuit::transformer_fault_current.",
+        inputs: &[POWER, VOLTAGE, IMPEDANCE, COUNTED],
         expected: &[
             needed(
                 "full_load",
@@ -140,10 +138,9 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "fault current along runs",
-        about: "Fault currents behind several runs in a row, point to point: the functions of physics::circuit with the constants of tables::fault_constants.",
+        about: "Three-phase fault currents behind several runs in a row, point to point: the functions of physics::circuit with the constants of tables::fault_constants.",
         inputs: &[
             VOLTAGE,
-            PHASE_COUNT,
             optional(
                 "power",
                 Takes::Measured(Kind::ApparentPower),
@@ -213,7 +210,7 @@ pub const TOPICS: &[Topic] = &[
 fn full_load(inputs: &Inputs) -> Result<Current, String> {
     let power: ApparentPower = inputs.measured("power")?;
     Ok(transformer_current(
-        phases(inputs),
+        Phases::Three,
         power,
         inputs.measured("voltage")?,
     ))
@@ -293,7 +290,7 @@ fn work_runs(inputs: &Inputs) -> Result<Answers, String> {
             length,
             sets,
         };
-        let factor = run_factor(phases(inputs), current, voltage, run);
+        let factor = run_factor(Phases::Three, current, voltage, run);
         let multiplier = run_multiplier(factor);
         current = share_of(multiplier, current);
         constants.push(constant);

@@ -1,16 +1,15 @@
 //! Voltage drop of a run.
 
 use super::conductors::{METAL, SETS, bare_demand, run_of, worked};
-use super::{Answers, CONDUITS, Gathered, Inputs, PHASES, Topic, Work, phases};
+use super::{Answers, CONDUITS, Gathered, Inputs, Topic, Work};
 use crate::reference::keys::{Key, Takes, missing, needed, optional};
-use ventrail::physics::circuit::{DropRun, circular_mils_for_drop, voltage_drop};
+use ventrail::physics::circuit::{DropRun, Phases, voltage_drop};
 use ventrail::quantity::{CrossSection, ImpedancePerLength, Kind, Ratio, Voltage};
 use ventrail::sizing::conductor::RunInput;
-use ventrail::tables::nec_chapter_9::{area, size_of_area};
+use ventrail::tables::nec_chapter_9::size_of_area;
 use ventrail::working::Run;
 
 const CONDUIT: Key = optional("conduit", Takes::Word(CONDUITS), "else steel");
-const PHASES_OF_RUN: Key = optional("phases", Takes::Word(PHASES), "else 3");
 const CURRENT: Key = needed("current", Takes::Measured(Kind::Current), "line current");
 const LENGTH: Key = needed("length", Takes::Measured(Kind::Length), "length one way");
 
@@ -49,16 +48,15 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "voltage drop by ohms",
-        about: "Drop of a run of known impedance: physics::circuit::voltage_drop.",
+        about: "Drop of a three-phase run of known impedance: physics::circuit::voltage_drop.",
         inputs: &[
             CURRENT,
             LENGTH,
-            PHASES_OF_RUN,
             SETS,
-            optional(
+            needed(
                 "resistance",
                 Takes::Measured(Kind::ImpedancePerLength),
-                "of one conductor; or k_ohm_cmil_per_ft and size",
+                "of one conductor",
             ),
             optional(
                 "reactance",
@@ -70,12 +68,6 @@ pub const TOPICS: &[Topic] = &[
                 Takes::Measured(Kind::Ratio),
                 "else 1, with which the resistance may be an effective impedance",
             ),
-            optional(
-                "k_ohm_cmil_per_ft",
-                Takes::Number,
-                "the constant K of the metal: resistance by K and area",
-            ),
-            optional("size", Takes::Size, "the conductor, for its area"),
             optional(
                 "supply",
                 Takes::Measured(Kind::Voltage),
@@ -94,11 +86,10 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "area for a voltage drop",
-        about: "Smallest area which keeps a drop by the constant K: physics::circuit::circular_mils_for_drop.",
+        about: "Smallest area which keeps a drop of a three-phase run by the constant K: physics::circuit::voltage_drop turned round, by its drop with one circular mil.",
         inputs: &[
             CURRENT,
             LENGTH,
-            PHASES_OF_RUN,
             needed(
                 "k_ohm_cmil_per_ft",
                 Takes::Number,
@@ -136,16 +127,12 @@ fn work_drop_by_table(inputs: &Inputs) -> Result<Answers, String> {
 }
 
 fn work_drop_by_ohms(inputs: &Inputs) -> Result<Answers, String> {
-    let resistance = match inputs.maybe("resistance") {
-        Some(resistance) => resistance,
-        None => resistance_by_constant(inputs)?,
-    };
     let drop = voltage_drop(
-        phases(inputs),
+        Phases::Three,
         inputs.measured("current")?,
         inputs.measured_or("power_factor", Ratio::of_one(1.0)),
         DropRun {
-            resistance,
+            resistance: inputs.measured("resistance")?,
             reactance: inputs.measured_or("reactance", ImpedancePerLength::ohms_per_metre(0.0)),
             length: inputs.measured("length")?,
             sets: inputs.count_or("sets", 1),
@@ -160,30 +147,26 @@ fn work_drop_by_ohms(inputs: &Inputs) -> Result<Answers, String> {
         .done()
 }
 
-/// K is the resistance of one foot of one circular mil.
-fn resistance_by_constant(inputs: &Inputs) -> Result<ImpedancePerLength, String> {
-    let (Some(constant), Ok(size)) = (inputs.number("k_ohm_cmil_per_ft"), inputs.size("size"))
-    else {
-        return Err(missing("resistance, or k_ohm_cmil_per_ft with size"));
-    };
-    let feet = 1000.0;
-    Ok(ImpedancePerLength::ohms_per_thousand_feet(
-        feet * constant / area(size).to_circular_mils(),
-    ))
-}
-
 fn work_area_for_drop(inputs: &Inputs) -> Result<Answers, String> {
     let constant = inputs
         .number("k_ohm_cmil_per_ft")
         .ok_or_else(|| missing("k_ohm_cmil_per_ft"))?;
-    let mils = circular_mils_for_drop(
-        phases(inputs),
-        constant,
+    let allowed: Voltage = inputs.measured("drop")?;
+    let thousand_feet = 1000.0;
+    let with_one_mil = voltage_drop(
+        Phases::Three,
         inputs.measured("current")?,
-        inputs.measured("length")?,
-        inputs.measured("drop")?,
+        Ratio::of_one(1.0),
+        DropRun {
+            // K is the resistance of one foot of one circular mil.
+            resistance: ImpedancePerLength::ohms_per_thousand_feet(thousand_feet * constant),
+            reactance: ImpedancePerLength::ohms_per_metre(0.0),
+            length: inputs.measured("length")?,
+            sets: 1,
+        },
     );
-    let wanted = CrossSection::circular_mils(mils);
+    // The drop falls as the area grows.
+    let wanted = CrossSection::circular_mils((with_one_mil / allowed).to_one());
     Gathered::default()
         .quantity("area", Some(wanted))
         .size("size", size_of_area(wanted))

@@ -5,8 +5,8 @@ use crate::reference::keys::{Key, Takes, missing, needed, optional};
 use std::sync::Arc;
 use ventrail::physics::air::heat_left_for_air;
 use ventrail::physics::heat::{
-    drive_loss_by_motor, loss_by_resistance, loss_by_square_of_current, reactor_loss_by_motor,
-    sealed_rise, surface_needed, wall_conductance, wall_heat,
+    drive_loss_by_motor, loss_by_square_of_current, reactor_loss_by_motor, run_loss, sealed_rise,
+    wall_conductance,
 };
 use ventrail::quantity::{
     Area, HeatConductance, Kind, Length, Power, Ratio, ShaftPower, Temperature,
@@ -90,7 +90,7 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "heat through walls",
-        about: "Heat which the walls carry at a rise, and what is left: physics::heat::wall_heat, physics::air::heat_left_for_air.",
+        about: "Heat which the walls carry at a rise, and what is left: physics::heat::wall_conductance and physics::air::heat_left_for_air; the walls have the rest.",
         inputs: &[
             AREA,
             HEIGHT,
@@ -99,11 +99,7 @@ pub const TOPICS: &[Topic] = &[
             MOUNTING,
             COEFFICIENT,
             RISE,
-            optional(
-                "heat",
-                Takes::Measured(Kind::Power),
-                "heat inside, for what is left",
-            ),
+            HEAT,
         ],
         expected: &[
             needed("area", Takes::Measured(Kind::Area), "effective surface"),
@@ -149,7 +145,7 @@ pub const TOPICS: &[Topic] = &[
     },
     Topic {
         name: "surface needed",
-        about: "Surface which a heat needs at a rise: physics::heat::surface_needed.",
+        about: "Surface which a heat needs at a rise: physics::heat::sealed_rise turned round, by its rise with one square metre.",
         inputs: &[COEFFICIENT, HEAT, RISE],
         expected: &[needed(
             "area",
@@ -157,11 +153,11 @@ pub const TOPICS: &[Topic] = &[
             "effective surface",
         )],
         work: Work::Now(|inputs| {
-            let area = surface_needed(
-                inputs.measured("heat")?,
-                inputs.measured("coefficient")?,
-                inputs.measured("rise")?,
-            );
+            let rise: TemperatureDifference = inputs.measured("rise")?;
+            let one = wall_conductance(inputs.measured("coefficient")?, Area::square_metres(1.0));
+            let with_one = sealed_rise(inputs.measured("heat")?, one);
+            // The rise falls as the surface grows.
+            let area = Area::square_metres(with_one.to_kelvin() / rise.to_kelvin());
             Gathered::default().quantity("area", Some(area)).done()
         }),
     },
@@ -224,27 +220,30 @@ pub const TOPICS: &[Topic] = &[
         }),
     },
     Topic {
-        name: "heat by resistance",
-        about: "Heat of current paths of known resistance: physics::heat::loss_by_resistance.",
+        name: "heat of a run",
+        about: "Heat of one of the three conductors of a run: a third of physics::heat::run_loss.",
         inputs: &[
-            PATHS,
-            needed("current", Takes::Measured(Kind::Current), "of each path"),
+            needed("current", Takes::Measured(Kind::Current), "line current"),
             needed(
-                "resistance_ohm",
-                Takes::Number,
-                "of each path, at its working temperature",
+                "resistance",
+                Takes::Measured(Kind::ImpedancePerLength),
+                "of one conductor, at its working temperature",
             ),
+            needed("length", Takes::Measured(Kind::Length), "of the run"),
         ],
-        expected: &[HEAT_GIVEN],
+        expected: &[needed(
+            "heat",
+            Takes::Measured(Kind::Power),
+            "of one conductor",
+        )],
         work: Work::Now(|inputs| {
-            let resistance = inputs
-                .number("resistance_ohm")
-                .ok_or_else(|| missing("resistance_ohm"))?;
-            let heat = loss_by_resistance(
-                inputs.count_or("paths", 1),
+            let of_three = run_loss(
                 inputs.measured("current")?,
-                resistance,
+                inputs.measured("resistance")?,
+                inputs.measured("length")?,
+                1,
             );
+            let heat = Power::watts(of_three.to_watts() / 3.0);
             Gathered::default().quantity("heat", Some(heat)).done()
         }),
     },
@@ -336,13 +335,12 @@ fn work_walls(inputs: &Inputs) -> Result<Answers, String> {
         conductance(inputs)?,
         inputs.measured::<TemperatureDifference>("rise")?,
     );
-    let left = inputs
-        .maybe::<Power>("heat")
-        .map(|heat| heat_left_for_air(heat, walls, rise));
+    let heat: Power = inputs.measured("heat")?;
+    let left = heat_left_for_air(heat, walls, rise);
     Gathered::default()
         .quantity("area", Some(surface(inputs)?))
-        .quantity("through_walls", Some(wall_heat(walls, rise)))
-        .quantity("left", left)
+        .quantity("through_walls", Some(heat - left))
+        .quantity("left", Some(left))
         .done()
 }
 

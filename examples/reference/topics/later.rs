@@ -36,6 +36,14 @@ pub const TOPICS: &[Topic] = &[
         "what running motors add to a fault current",
     ),
     later(
+        "single-phase voltage drop",
+        "drop of a run of two wires, by the constant K",
+    ),
+    later(
+        "single-phase fault current",
+        "fault currents between the lines of a single-phase transformer",
+    ),
+    later(
         "imperial wall rule",
         "rise of a sealed box by the rule in square feet and Fahrenheit",
     ),
@@ -46,6 +54,10 @@ pub const TOPICS: &[Topic] = &[
     later(
         "thermal resistance",
         "thermal resistance which an enclosure may have",
+    ),
+    later(
+        "heat by resistance",
+        "heat of the poles of a device of known resistance",
     ),
     later("cabinet width", "width of a cabinet from its free surface"),
     later(

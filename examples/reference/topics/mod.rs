@@ -11,7 +11,6 @@ mod panel;
 
 use super::keys::{Answers, Inputs, Key, Takes, Value, endings};
 use std::sync::Arc;
-use ventrail::physics::circuit::Phases;
 use ventrail::quantity::{Quantity, Temperature, WireSize};
 use ventrail::tables::{Column, Conduit, DeviceType, Metal};
 use ventrail::working::{Amount, Figure, Given, Origin};
@@ -205,7 +204,6 @@ const DEVICES: &[&str] = &[
     "class CC fuse",
     "inverse time breaker",
 ];
-const PHASES: &[&str] = &["1", "3"];
 
 /// Copper where nothing else is put in.
 fn metal(inputs: &Inputs) -> Metal {
@@ -221,14 +219,6 @@ fn conduit(inputs: &Inputs) -> Conduit {
         Some("pvc") => Conduit::Pvc,
         Some("aluminium") => Conduit::Aluminium,
         _ => Conduit::Steel,
-    }
-}
-
-/// Three where nothing else is put in.
-fn phases(inputs: &Inputs) -> Phases {
-    match inputs.word("phases") {
-        Some("1") => Phases::Single,
-        _ => Phases::Three,
     }
 }
 
