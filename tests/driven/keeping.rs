@@ -125,6 +125,58 @@ fn change_in_another_tab_is_said_and_nothing_is_written_over() -> Outcome {
 }
 
 #[test]
+fn what_a_tab_behind_put_aside_is_offered_after_a_reload() -> Outcome {
+    drive(async |page| {
+        page.without_file_pickers().await?;
+        open_demo(page).await?;
+        let first = page.driver().window().await?;
+        let second = page.driver().new_tab().await?;
+        page.driver().switch_to_window(second).await?;
+        page.open().await?;
+        page.click(&cell(0, column::LOAD)).await?;
+        page.press("From the second tab").await?;
+        page.press(Key::Enter).await?;
+
+        page.driver().switch_to_window(first).await?;
+        page.find("#other-tab").await?;
+        page.click(&cell(0, column::TAG)).await?;
+        page.press("P-1 here").await?;
+        page.press(Key::Enter).await?;
+        page.wait_for_text(".kept", "until you choose").await?;
+        // A stop now would hand out this tab's own sheet.
+        let key = page
+            .script(
+                "return document.getElementById('broken-save').getAttribute('data-key')",
+                &[],
+            )
+            .await?;
+        let aside = page.stored(key.as_str().unwrap_or_default()).await?;
+        assert!(aside.is_some_and(|kept| kept.contains("P-1 here")));
+        // As if the tab had died, so that nothing asks before it goes.
+        page.script(
+            "window.addEventListener('beforeunload', event => event.stopImmediatePropagation(), true)",
+            &[],
+        )
+        .await?;
+        page.reload().await?;
+        assert_eq!(value(page, 0, column::LOAD).await?, "From the second tab");
+        page.wait_for_text("#rescued", "beside the other tab's")
+            .await?;
+        page.click("#save-rescued").await?;
+        assert!(
+            page.wait_for_download("ventrail-rescued.json")
+                .await?
+                .contains("P-1 here")
+        );
+        page.click("#drop-rescued").await?;
+        page.reload().await?;
+        page.find(&cell(0, 0)).await?;
+        assert_eq!(page.find_all("#rescued").await?.len(), 0);
+        Ok(())
+    })
+}
+
+#[test]
 fn full_store_is_said_and_the_work_goes_on() -> Outcome {
     drive(async |page| {
         open_demo(page).await?;
