@@ -813,11 +813,11 @@ fn heats_of(worked: &Worked, sheet: &Sheet, group: LedgerGroup) -> Vec<(bool, f6
 
 /// Heat of the main device: as entered, else three poles at their limit by the square of the running current.
 fn main_heat(worked: &Worked, sheet: &Sheet) -> Option<f64> {
-    let rating = worked.incoming.main.as_ref()?.rating.as_ref()?.value;
     let entered: Option<Power> = sheet.record.quantity(Field::MainLoss);
     if let Some(entered) = entered {
         return Some(entered.to_watts());
     }
+    let rating = worked.incoming.main.as_ref()?.rating.as_ref()?.value;
     let main = worked.incoming.main.as_ref()?.device.value;
     let limit = match main {
         DeviceType::InverseTimeBreaker => ventrail::tables::device_losses::breaker_pole(rating),
