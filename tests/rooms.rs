@@ -48,6 +48,9 @@ const PACKAGES: [(&str, &[&str]); 8] = [
 /// Words from which on a literal is a sentence.
 const SENTENCE: usize = 4;
 
+/// Where the fixed texts of the page stand, each as `name = "text";`.
+const TEXTS: &str = "words/page.rs";
+
 /// Fields whose texts are citations or expressions, not sentences, and the only files which have them.
 const CITATIONS: [(&str, &[&str]); 2] = [
     ("sizing/rules.rs", &["clause", "expression"]),
@@ -301,6 +304,45 @@ fn a_sentence_outside_words_is_found() {
     ] {
         expect_none(sentences, path, text);
     }
+}
+
+#[test]
+fn every_text_of_the_page_is_used() {
+    let sources = sources();
+    let written: Vec<String> = page_texts(&sources)
+        .into_iter()
+        .map(|(_, name)| name)
+        .collect();
+    let listed: Vec<&str> = ventrail::words::page::ALL
+        .iter()
+        .map(|(name, _)| *name)
+        .collect();
+    assert_eq!(written, listed, "not every text of {TEXTS} is looked at");
+    report(&sources, unused_texts);
+}
+
+#[test]
+fn a_text_of_the_page_which_is_used_nowhere_is_found() {
+    let count = |page: &str, other: (&str, &str)| {
+        unused_texts(&[Source::of(TEXTS, page), Source::of(other.0, other.1)]).len()
+    };
+    let text = "texts! { undo = \"Undo\"; }";
+    assert_eq!(count(text, ("ui/bar.rs", "fn f() { page::undo() }")), 0);
+    assert_eq!(
+        count(text, ("ui/bar.rs", "fn f() { words::page::undo() }")),
+        0
+    );
+    assert_eq!(
+        count(text, ("ui/bar.rs", "use crate::words::page::{undo};")),
+        0
+    );
+    assert_eq!(
+        count(text, ("ui/bar.rs", "// page::undo()\nfn undo() {}")),
+        1
+    );
+    assert_eq!(count(text, ("ui/bar.rs", "fn f() { history.undo() }")), 1);
+    let with_a_use = format!("{text} pub fn undo_named() -> String {{ undo().to_owned() }}");
+    assert_eq!(count(&with_a_use, ("ui/bar.rs", "")), 0);
 }
 
 #[test]
@@ -567,6 +609,58 @@ fn words_of(text: &str) -> usize {
                 .all(|character| character.is_alphabetic() || matches!(character, '\'' | '-' | '’'))
         })
         .count()
+}
+
+/// The fixed texts of the page, each with its line and name.
+fn page_texts(sources: &[Source]) -> Vec<(usize, String)> {
+    sources
+        .iter()
+        .filter(|source| source.path == TEXTS)
+        .flat_map(|source| source.tokens.windows(5))
+        .filter_map(|five| match five {
+            [before, name, equals, text, end]
+                if (before.is_mark('{') || before.is_mark(';'))
+                    && equals.is_mark('=')
+                    && text.text().is_some()
+                    && end.is_mark(';') =>
+            {
+                Some((name.line, name.word()?.to_owned()))
+            }
+            _ => None,
+        })
+        .collect()
+}
+
+/// Fixed texts of the page which nothing asks for: neither as `page::name`, nor within their own file as `name()`.
+fn unused_texts(sources: &[Source]) -> Vec<Finding> {
+    let mut used = BTreeSet::new();
+    for source in sources {
+        for (_, path) in source.paths() {
+            for two in path.windows(2) {
+                if let [module, name] = two
+                    && module == "page"
+                {
+                    used.insert(name.clone());
+                }
+            }
+        }
+        for two in source.tokens.windows(2).filter(|_| source.path == TEXTS) {
+            if let [name, mark] = two
+                && mark.is_mark('(')
+            {
+                used.extend(name.word().map(str::to_owned));
+            }
+        }
+    }
+    page_texts(sources)
+        .into_iter()
+        .filter(|(_, name)| !used.contains(name))
+        .map(|(line, name)| Finding {
+            path: TEXTS.to_owned(),
+            line,
+            what: format!("the text `{name}` is used nowhere"),
+        })
+        .collect()
 }
 
 fn heads(sources: &[Source]) -> Vec<Finding> {

@@ -1,9 +1,10 @@
 //! Every sentence, label, unit symbol and number format shown.
 //!
 //! Here: text, and numbers as text. Not here: decisions, or arithmetic beyond the conversion of units and rounding for
-//! show. All text is English, and every function which gives text is a `match` without a catch-all, so that a missing
-//! sentence does not compile; a second language would be a second arm beside each. Start with [`label`], [`amount`] and
-//! [`page`].
+//! show. All text is English. The names of fields and choices, findings, refusals and cautions each come from a `match`
+//! without a catch-all, so that a missing one does not compile. Titles of rules and meanings of symbols go by a text, and
+//! so need a catch-all; tests ask for each of them. A second language would be a second arm beside each. Start with
+//! [`label`], [`amount`] and [`page`].
 
 mod cautions;
 mod entries;

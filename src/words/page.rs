@@ -23,7 +23,6 @@ macro_rules! texts {
 texts! {
     // The program.
     program = "Ventrail";
-    purpose = "A worksheet for planning control panels of variable frequency drives";
     skip_to_sheet = "Skip to the sheet";
 
     // The bar at the head of the window.
@@ -40,8 +39,6 @@ texts! {
     nothing_to_redo = "Nothing to redo";
     keys_button = "Keys";
     close = "Close";
-    cancel = "Cancel";
-    go_on = "Go on";
 
     // The sheet and its parts.
     untitled = "Untitled sheet";
@@ -64,15 +61,11 @@ texts! {
     heading_protection = "Protection and conductors";
     heading_reactors = "Input reactors and heat";
     heading_air = "Temperature and air";
-    sections_label = "Parts of the sheet";
 
     // The empty sheet.
     empty_sheet = "List the motors of one panel, each on its own drive, with its supply and its enclosure: Ventrail sizes conductors, devices and reactors, adds up the heat, and shows how each figure came about.";
-    empty_start = "Add the first feeder";
-    empty_demo = "Look at a demo sheet";
     demo_brine_hall = "Demo: brine hall, 11 feeders, filter fans";
     demo_outdoor = "Demo: sealed panel outdoors at 1,900 m";
-    demo_remark = "Demo with invented data";
     no_feeders = "No feeders yet.";
     no_sources = "No other sources of heat yet.";
     no_notes = "Nothing to note.";
@@ -87,15 +80,9 @@ texts! {
     // Sentences which open as lists.
     sentence_open = "Fill in";
     sentence_close = "Done";
-    sentence_help = "Press Enter or click a value to fill in this part as a list.";
-    assumed_hint = "assumed";
-    clear_entry = "Empty this field";
-    take_assumed = "Go back to the assumed value";
     typed_not_taken = "It was typed, but not yet taken. Press Enter in it to take it.";
     choose_none = "not entered";
-    unit_hint = "A unit may be typed after the number.";
     refused_label = "Not taken";
-    working_open = "Show the working";
 
     // Feeders.
     add_feeder = "Add feeder";
@@ -107,7 +94,6 @@ texts! {
     feeder_before = "Feeder before";
     feeder_after = "Feeder after";
     feeder_form_open = "All fields of this feeder";
-    feeder_form_title = "Feeder in full";
     group_driven = "What is driven";
     group_ahead = "Ahead of the drive";
     group_behind = "Behind the drive";
@@ -115,7 +101,6 @@ texts! {
     group_drive = "Drive, by its data sheet";
     group_device = "Device and short circuit";
     group_reactor = "Input reactor";
-    group_motor = "Motor and duty";
     group_remarks = "Remarks";
     head_drop = "Drop";
     head_heat = "Heat";
@@ -123,9 +108,7 @@ texts! {
     head_conductors = "Conductors";
     head_reactor = "Reactor";
     head_margin = "Margin";
-    head_motor_current = "Motor current";
     head_disconnect = "Disconnect";
-    head_grounding = "Grounding conductor";
     head_running = "running together";
     head_connected = "connected";
     head_total = "Total";
@@ -143,13 +126,10 @@ texts! {
     none_fits = "none fits";
     grid_label = "Feeders, one in each row";
     grid_help = "Arrow keys move, typing replaces, Enter or F2 edits, Escape gives up the edit.";
-    standing_by_mark = "stands by";
 
     // Other sources of heat.
     add_source = "Add source";
-    delete_source = "Delete source";
     source_added = "Source of heat added.";
-    source_unnamed = "Unnamed source";
 
     // Worked values.
     ledger_label = "Heat ledger, watts";
@@ -161,7 +141,6 @@ texts! {
     required_ampacity = "Ampacity required";
     required_connected = "Ampacity required for everything connected";
     usable_ampacity = "Ampacity of the size";
-    smaller_size = "Next smaller size";
     grounding_conductor = "Equipment grounding conductor";
     branch_device = "Branch device";
     main_device = "Main device";
@@ -178,7 +157,6 @@ texts! {
     source_impedance = "Source impedance on the drive's base";
     reactor_entered = "Reactor entered";
     reactor_advised = "Reactor advised";
-    reactor_not_needed = "none needed";
     reactor_none = "none";
     inductance = "Inductance of each phase";
     reactor_rated_current = "Rated current, at least";
@@ -198,7 +176,6 @@ texts! {
     multiplier = "Multiplier M of the incoming run";
     fault_at_source = "Fault current at the start of the incoming run";
     fault_at_panel = "Fault current at the panel";
-    lowest_rating = "Lowest rating inside";
     surface = "Effective surface";
     conductance = "Heat through the walls";
     sealed_rise = "Temperature rise when sealed";
@@ -217,20 +194,16 @@ texts! {
     margin_label = "Totals and margin notes";
     notes_label = "Margin notes, stops first";
     go_to_subject = "Go to it";
-    go_to_note = "Go to the note";
     answer = "Answer";
     answer_placeholder = "Your answer, for the reviewer";
     next_note = "Next note";
-    previous_note = "Previous note";
 
     // The working strip.
     strip_label = "Working of the figure under the cursor";
     strip_empty = "Move to a worked figure to read its working here.";
     strip_entered = "You entered this value.";
-    strip_follow = "Space shows the working";
     strip_pin = "Pin this working";
     strip_unpin = "Follow the cursor again";
-    strip_pinned = "pinned";
     strip_whole = "Whole chain";
     strip_short = "First step only";
     key_space = "Space";
@@ -241,14 +214,9 @@ texts! {
     caution_shrink = "Show one line only";
 
     // Where the sheet is kept.
-    saved_here = "Saved in this browser";
     kept_aside = "Kept beside the other tab's sheet until you choose";
     not_kept_here = "Not kept in this browser";
-    saving = "Saving in this browser";
     not_in_file = "Not yet in a file";
-    changed_since_file = "Changed since it was saved as a file";
-    same_as_file = "The file holds this state";
-    store_refused = "This browser did not keep the last change. Save the sheet as a file now, so that it is not lost.";
     store_full = "This browser's store is full. The sheet is safe on this page; save it as a file now.";
     store_missing = "This browser keeps nothing for this page, perhaps because it is a private window. Save the sheet as a file before you close it.";
     store_unreadable = "What this browser kept of the last sheet could not be read. It is kept as it is; you can save it as a file and look at it.";
@@ -262,11 +230,8 @@ texts! {
     other_tab_keep = "Keep this one";
     other_tab_taken = "The other tab's sheet is open here now. Undo brings this tab's back.";
     other_tab_name = "the other tab's sheet";
-    leave_unsaved = "The last change is not yet kept.";
 
     // Files.
-    file_opened = "The file is open.";
-    file_saved = "Handed to the browser as a file.";
     file_refused_title = "The file was not opened";
     file_refused_kept = "The sheet you had open is unchanged.";
     file_unreadable = "The browser could not read the file. It may have been moved, or be in use elsewhere.";
@@ -274,14 +239,11 @@ texts! {
     save_failed_title = "The file was not saved.";
     save_failed = "The browser could not write it. The sheet is still on this page; try another place or name.";
     sheet_replaced = "An empty sheet is open. Undo brings the former one back.";
-    open_replaces = "The open sheet is not in a file. Opening another one replaces it; undo brings it back until this tab is closed.";
-    new_replaces = "The open sheet is not in a file. A new sheet replaces it; undo brings it back until this tab is closed.";
     default_file_name = "ventrail-sheet";
     rescued_file_name = "ventrail-rescued.json";
 
     // The printed summary.
     print_title = "Panel heat and protection summary";
-    print_sheet = "Sheet";
     print_version = "Ventrail version";
     print_planning = "Planning figures, not an approval";
     print_run_ahead = "Run ahead";
@@ -297,7 +259,6 @@ texts! {
     print_inks = "Marks: e entered, a assumed, no mark worked out";
     print_mark_entered = "e";
     print_mark_assumed = "a";
-    print_continued = "continued";
     print_answer = "Answer:";
     print_no_answer = "No answer yet.";
     print_workings = "Workings";
@@ -306,8 +267,6 @@ texts! {
     print_end = "End of the summary";
 
     // When the program stops.
-    stopped_title = "Ventrail has stopped";
-    stopped_text = "The program met a fault of its own. What you had entered was kept in this browser at each step: save that copy as a file, then load the page again.";
     stopped_twice = "Ventrail stopped twice while opening the last sheet, so it has opened an empty one. The last sheet is kept: save it as a file.";
 
     // The list of keys.
