@@ -1082,6 +1082,169 @@ fn a_total_over_a_motor_whose_drive_is_unknown_is_never_within() {
 }
 
 #[test]
+fn a_motor_which_is_not_in_the_table_leaves_no_total_within() {
+    // 250 hp has no row at 230 V: it runs all the same, and nothing may be found within without it.
+    let giant = vec![(Field::MotorPower, horsepower(250.0))];
+    let small = vec![
+        (Field::MotorPower, horsepower(10.0)),
+        (Field::DriveInput, amperes(30.0)),
+    ];
+    let worked = panel_of(&[(Field::SupplyVoltage, volts(240.0))], &[giant, small]);
+    only_note(&worked.notes, "main-incomplete");
+    only_note(&worked.notes, "ledger-incomplete");
+    for kind in [TotalKind::IncomingCurrent, TotalKind::MainDevice] {
+        assert_eq!(verdict(&worked, kind), Verdict::Unknown, "{kind:?}");
+    }
+}
+
+#[test]
+fn losses_count_before_the_supply_voltage_is_known() {
+    let drive = [
+        (Field::MotorPower, horsepower(40.0)),
+        (Field::DriveLoss, watts(900.0)),
+    ];
+    let mut sheet = sheet(&[], &[drive.to_vec()]);
+    sheet.record.clear(Field::SupplyVoltage);
+    let worked = work_out(&sheet);
+    assert_near(si(&worked.ledger.running), 900.0);
+    assert_eq!(
+        verdict(&worked, TotalKind::InsideTemperature),
+        Verdict::Unknown
+    );
+}
+
+#[test]
+fn an_outdoor_enclosure_without_the_heat_of_the_sun_is_never_within() {
+    let worked = boxed(&[(Field::Surroundings, choice(Choice::Outdoors))], &[]);
+    only_note(&worked.notes, "sun-missing");
+    assert_eq!(
+        verdict(&worked, TotalKind::InsideTemperature),
+        Verdict::Unknown
+    );
+}
+
+#[test]
+fn the_drop_of_one_run_is_not_shown_as_that_of_both() {
+    let open = feeder(&three_drives()[0]);
+    assert!(open.drop_ratio.is_none());
+    assert_eq!(only_note(&open.notes, "length-missing").grade, Grade::Query);
+    let mut entries = three_drives()[0].clone();
+    entries.push((Field::Run(Run::Behind, RunField::Length), feet(100.0)));
+    let known = feeder(&entries);
+    assert!(known.drop_ratio.is_some());
+    assert_no_note(&known.notes, "length-missing");
+}
+
+#[test]
+fn a_standby_which_asks_for_more_than_what_runs_is_a_query() {
+    let standby = |power: f64, input: f64| {
+        vec![
+            (Field::MotorPower, horsepower(power)),
+            (Field::DriveInput, amperes(input)),
+            (Field::Running, choice(Choice::Standby)),
+        ]
+    };
+    let duty = three_drives()[2].clone();
+    let larger = panel_of(&[], &[duty.clone(), standby(40.0, 50.0)]);
+    assert_eq!(
+        only_note(&larger.notes, "standby-larger").grade,
+        Grade::Query
+    );
+    let equal = panel_of(&[], &[duty, standby(10.0, 13.0)]);
+    assert_no_note(&equal.notes, "standby-larger");
+}
+
+#[test]
+fn a_reactor_of_another_current_counts_for_what_it_is_to_the_drive() {
+    // 3 % of 100 A is 0.03 x 14 / 100 = 0.42 % of the motor's 14 A: no smoothing, so 0.60 stays, and 17.93 A with it:
+    // 7460 / (0.86 x 0.97 x 831.384 x 0.60).
+    let far = feeder(&[
+        (Field::MotorPower, horsepower(10.0)),
+        (Field::ReactorPercent, per_cent(3.0)),
+        (Field::ReactorReference, choice(Choice::OfOwnCurrent)),
+        (Field::ReactorReferenceCurrent, amperes(100.0)),
+    ]);
+    assert_amperes(&far.drive_input, 17.927_3);
+    // On a bus with capacitors 3 % is advised; 3 % of twice the drive's current is 1.5 %.
+    let entries = vec![
+        (Field::MotorPower, horsepower(10.0)),
+        (Field::DriveInput, amperes(14.0)),
+        (Field::ReactorPercent, per_cent(3.0)),
+        (Field::ReactorReference, choice(Choice::OfOwnCurrent)),
+        (Field::ReactorReferenceCurrent, amperes(28.0)),
+    ];
+    let worked = panel_of(&[(Field::Capacitors, choice(Choice::Yes))], &[entries]);
+    let note = only_note(&worked.notes, "reactor-below-advice");
+    let NoteKind::ReactorBelowAdvice { entered, .. } = note.kind else {
+        panic!("{note:?}");
+    };
+    assert_near(entered.to_per_cent(), 1.5);
+}
+
+#[test]
+fn a_fault_current_answers_for_the_source_impedance_and_leaves_its_power_open() {
+    // A drive of 13 A against 39 kA at the same voltage: 13 / 39 000 = 0.0333 %, under 1 %.
+    let drive = three_drives()[2].clone();
+    let worked = panel_of(
+        &[(Field::SourceFaultCurrent, kiloamperes(39.0))],
+        std::slice::from_ref(&drive),
+    );
+    let reactor = &worked.feeders[0].reactor;
+    assert_eq!(reactor.reasons, [ReactorReason::SourceImpedance]);
+    let impedance = reactor.source_impedance.as_ref().unwrap();
+    assert_near(si(impedance), 13.0 / 39_000.0);
+    only_note(&worked.notes, "source-unknown");
+    let unknown = panel_of(&[], &[drive]);
+    assert!(unknown.feeders[0].reactor.reasons.is_empty());
+    only_note(&unknown.notes, "source-unknown");
+}
+
+#[test]
+fn parallel_conductors_in_a_column_without_cells_are_a_stop_without_a_number() {
+    // Inside, two sets, 1.25 x 50 A = 62.5 A: unmarked terminals ask for 60 °C, which ends at 1 AWG.
+    let mut entries = three_drives()[0].clone();
+    entries.push((Field::Run(Run::Ahead, RunField::Sets), Entry::Count(2)));
+    let sized = feeder(&entries);
+    assert_eq!(
+        sized.ahead.as_ref().unwrap().choice,
+        ConductorChoice::NoCell {
+            column: Column::C60
+        }
+    );
+    assert_eq!(
+        only_note(&sized.notes, "no-cell-in-column").grade,
+        Grade::Stop
+    );
+}
+
+#[test]
+fn a_sealed_enclosure_within_its_limit_only_by_a_hair_is_a_query() {
+    // 300 W over 31.416 W/K is 9.549 K: 44.549 °C. A quarter of the rise is 2.387 K.
+    let near = boxed(&[(Field::InsideLimit, celsius(46.0))], &[]);
+    assert_eq!(
+        only_note(&near.notes, "wall-rule-near-limit").grade,
+        Grade::Query
+    );
+    let clear = boxed(&[(Field::InsideLimit, celsius(50.0))], &[]);
+    assert_no_note(&clear.notes, "wall-rule-near-limit");
+}
+
+#[test]
+fn other_loads_are_said_to_count_at_their_current() {
+    let worked = boxed(
+        &[],
+        &[
+            (Field::SourceHeat, watts(10.0)),
+            (Field::SourceCurrent, amperes(2.0)),
+        ],
+    );
+    assert_eq!(
+        only_note(&worked.notes, "other-loads-at-current").grade,
+        Grade::Note
+    );
+}
+
+#[test]
 fn a_loss_entered_for_no_reactor_is_a_query_and_no_heat() {
     let plain = feeder(&three_drives()[0]);
     let mut entries = three_drives()[0].clone();
