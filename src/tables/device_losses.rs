@@ -1,7 +1,8 @@
 //! Largest losses of protective devices at their rating: breakers by IEC 60898-1, fuse links by IEC 60269-2 (gG, NH).
 //!
-//! Both tables are known from memory, and both are limits: real devices stay below them. Fuses of North American
-//! classes are not of the NH sizes; the limit of the NH size which is made for their rating stands in for them.
+//! Both tables are known from memory, and both are limits of their own kind of device. Fuses of North American classes are
+//! not of the NH sizes; the limit of the NH size which is made for their rating stands in for them, and a real link can
+//! lie above it: the loss is assumed until it is typed.
 
 use crate::quantity::{Current, Power};
 
