@@ -30,6 +30,8 @@ pub struct ReactorSize {
 pub struct Reactor {
     /// The reasons of practice which the drive's own choke does not answer.
     pub reasons: Vec<ReactorReason>,
+    /// Whether reasons stay open, because the power of the source is not known.
+    pub is_open: bool,
     /// Ratio of the source's power to the drive's.
     pub source_ratio: Option<Arc<Figure>>,
     /// Source impedance on the drive's base.
@@ -143,6 +145,7 @@ pub fn reactor_of(
         .filter(|_| !is_answered)
         .map(|percent| advised_size(percent, input, supply));
     Reactor {
+        is_open: supply.power.is_none() && input.choke.value < ANSWERING_CHOKE,
         reasons,
         source_ratio,
         source_impedance,

@@ -260,7 +260,12 @@ pub(super) fn reactor(feeder: &WorkedFeeder, system: UnitSystem) -> Shown {
     if feeder.drive_input.is_none() {
         return Shown::Nothing;
     }
-    Shown::Value(Ink::Worked, page::reactor_none().to_owned())
+    let text = if reactor.is_open {
+        page::reactor_open()
+    } else {
+        page::reactor_none()
+    };
+    Shown::Value(Ink::Worked, text.to_owned())
 }
 
 fn no_answer() -> Shown {

@@ -158,6 +158,7 @@ texts! {
     reactor_entered = "Reactor entered";
     reactor_advised = "Reactor advised";
     reactor_none = "none";
+    reactor_open = "open";
     inductance = "Inductance of each phase";
     reactor_rated_current = "Rated current, at least";
     reactor_heat = "Heat of the reactor";
@@ -262,6 +263,8 @@ texts! {
     print_answer = "Answer:";
     print_no_answer = "No answer yet.";
     print_workings = "Workings";
+    print_entered = "Further values, as entered";
+    print_steps_once = "A step which several parts have in common is printed once, where it comes up first.";
     print_sources = "Sources";
     print_page_numbers = "Some browsers number the pages only when headers and footers are switched on in the print window.";
     print_end = "End of the summary";
