@@ -1054,7 +1054,6 @@ fn every_entry_refusal_says_what_is_wrong_and_what_would_be_taken() {
         },
         Refusal::OutOfRange {
             text: text(),
-            kind: Kind::Temperature,
             least: Unit::Celsius.to_si(-40.0),
             most: Unit::Celsius.to_si(70.0),
             unit: Unit::Fahrenheit,

@@ -52,8 +52,6 @@ pub enum Refusal {
     OutOfRange {
         /// What was typed.
         text: String,
-        /// What the field measures.
-        kind: Kind,
         /// Least value, in SI.
         least: f64,
         /// Greatest value, in SI.
@@ -147,7 +145,6 @@ pub fn read(field: Field, system: UnitSystem, text: &str) -> Result<Option<Entry
             let measured = measured(kind, spec(field).unit(system), text)?;
             let refusal = Refusal::OutOfRange {
                 text: text.to_owned(),
-                kind,
                 least,
                 most,
                 unit: measured.unit,

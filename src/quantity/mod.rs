@@ -210,10 +210,6 @@ impl Temperature {
     pub const fn fahrenheit(value: f64) -> Self {
         Self::celsius((value - 32.0) * 5.0 / 9.0)
     }
-    /// The value in degrees Fahrenheit.
-    pub const fn to_fahrenheit(self) -> f64 {
-        self.to_celsius() * 9.0 / 5.0 + 32.0
-    }
     /// A temperature of `value` kelvin.
     pub const fn kelvin(value: f64) -> Self {
         Self(value)

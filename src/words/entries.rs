@@ -1,13 +1,13 @@
 //! Entered and assumed values as text, in the units of the sheet, and why a value is assumed.
 
-use super::labels::{choice, label};
+use super::labels::{answers, choice, label};
 use super::numbers::{Rounding, counted, number, number_not_above, number_not_below};
 use super::units::{bare, bare_in, field_unit, size, whole, with_unit};
 use crate::assume::{AssumedValue, Assumption};
 use crate::entry::read;
 use crate::math::agree;
 use crate::quantity::Unit;
-use crate::sheet::{Choice, Entry, Measured, Shape, UnitSystem, spec};
+use crate::sheet::{Entry, Measured, Shape, UnitSystem, spec};
 use crate::working::{Amount, Field, Holder, HolderId, Run, RunField};
 use std::collections::BTreeMap;
 
@@ -19,11 +19,7 @@ pub fn entry(field: Field, entered: &Entry, system: UnitSystem) -> String {
         Entry::Measured(measured) => measured_text(field, measured, system),
         Entry::Count(count) => whole(*count),
         Entry::Choice(answer) => choice(*answer).to_owned(),
-        Entry::Choices(answers) => answers
-            .iter()
-            .map(|answer| choice(*answer))
-            .collect::<Vec<_>>()
-            .join(", "),
+        Entry::Choices(several) => answers(several, ", "),
         Entry::Size(wire) => size(*wire),
     }
 }
@@ -173,18 +169,10 @@ pub fn accepted(field: Field, system: UnitSystem) -> String {
         Shape::Count { least, most } => {
             format!("a whole number, {} to {}", whole(least), whole(most))
         }
-        Shape::Choice(offered) => format!("one of: {}", answers(offered)),
-        Shape::Choices(offered) => format!("any of: {}", answers(offered)),
+        Shape::Choice(offered) => format!("one of: {}", answers(offered, ", ")),
+        Shape::Choices(offered) => format!("any of: {}", answers(offered, ", ")),
         Shape::Size => "a conductor size such as 4 AWG, 3/0 or 250 kcmil".to_owned(),
     }
-}
-
-fn answers(offered: &[Choice]) -> String {
-    offered
-        .iter()
-        .map(|answer| choice(*answer))
-        .collect::<Vec<_>>()
-        .join(", ")
 }
 
 /// Why the value of `field` is assumed as it is: a clause to stand behind it.

@@ -359,6 +359,15 @@ pub const fn known(known: Known) -> &'static str {
     }
 }
 
+/// Several answers in a row, parted by `between`.
+pub fn answers<'a>(several: impl IntoIterator<Item = &'a Choice>, between: &str) -> String {
+    several
+        .into_iter()
+        .map(|answer| choice(*answer))
+        .collect::<Vec<_>>()
+        .join(between)
+}
+
 /// `text` with a small first letter, unless its first word is an abbreviation.
 pub fn lower_first(text: &str) -> String {
     let mut letters = text.chars();

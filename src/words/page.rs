@@ -4,6 +4,7 @@
 //! choices, findings, refusals. To add a text, add a line `name = "text";` to the group it belongs to.
 
 use super::labels::{label, lower_first};
+use super::numbers::counted;
 use crate::sheet::Edit;
 use crate::working::{Holder, HolderId, Place};
 
@@ -326,7 +327,7 @@ pub fn grade_counts(stops: usize, queries: usize, notes: usize) -> String {
     ]
     .into_iter()
     .filter(|(count, _, _)| *count > 0)
-    .map(|(count, one, many)| counted(count, one, many))
+    .map(|(count, one, many)| number_of(count, one, many))
     .collect();
     if parts.is_empty() {
         no_notes().to_owned()
@@ -337,7 +338,7 @@ pub fn grade_counts(stops: usize, queries: usize, notes: usize) -> String {
 
 /// How many feeders there are and which of them stand by: `11 feeders, 9 run together (P-403 and F-433 stand by)`.
 pub fn feeder_counts(feeders: usize, standing_by: &[String]) -> String {
-    let all = counted(feeders, "feeder", "feeders");
+    let all = number_of(feeders, "feeder", "feeders");
     match standing_by {
         [] => all,
         [one] => format!(
@@ -354,7 +355,7 @@ pub fn feeder_counts(feeders: usize, standing_by: &[String]) -> String {
 
 /// How much is assumed.
 pub fn assumption_count(count: usize) -> String {
-    counted(count, "value", "values")
+    number_of(count, "value", "values")
 }
 
 /// Words in a row: `a`, `a and b`, `a, b and c`.
@@ -559,10 +560,10 @@ pub fn announced(counts: &str) -> String {
 }
 
 /// `singular` for one, `plural` for any other number, after the number itself.
-fn counted(count: usize, singular: &str, plural: &str) -> String {
+fn number_of(count: usize, singular: &str, plural: &str) -> String {
     if count == 1 {
         format!("1 {singular}")
     } else {
-        format!("{count} {plural}")
+        format!("{} {plural}", counted(count))
     }
 }

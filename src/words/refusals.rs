@@ -1,13 +1,13 @@
 //! Refusals in words: what is wrong, what would be taken, what to do.
 
-use super::labels::choice;
+use super::labels::answers;
 use super::notes::shortened;
 use super::numbers::{Rounding, counted, number, number_not_above, number_not_below};
 use super::units::{size, unit_symbol, whole, with_unit};
 use crate::entry;
 use crate::file::{self, Damage, Expected, Fault};
 use crate::quantity::Unit;
-use crate::sheet::{Choice, Impossible};
+use crate::sheet::Impossible;
 
 /// Why a typed text was not taken, and what would be.
 pub fn entry_refusal(refusal: &entry::Refusal) -> String {
@@ -41,7 +41,6 @@ pub fn entry_refusal(refusal: &entry::Refusal) -> String {
         ),
         Refusal::OutOfRange {
             text,
-            kind: _,
             least,
             most,
             unit,
@@ -66,7 +65,7 @@ pub fn entry_refusal(refusal: &entry::Refusal) -> String {
         Refusal::NotOffered { text, offered } => format!(
             "“{}” is none of the answers. Type one of them, or how it begins: {}.",
             shortened(text),
-            answers(offered, "; ")
+            answers(*offered, "; ")
         ),
         Refusal::SeveralFit { text, fitting } => format!(
             "“{}” may mean {}. Type more of it.",
@@ -225,12 +224,4 @@ fn units(units: &[Unit]) -> String {
         [one] => one.clone(),
         [rest @ .., last] => format!("{} or {last}", rest.join(", ")),
     }
-}
-
-fn answers(answers: &[Choice], between: &str) -> String {
-    answers
-        .iter()
-        .map(|answer| choice(*answer))
-        .collect::<Vec<_>>()
-        .join(between)
 }
