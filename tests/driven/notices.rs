@@ -3,6 +3,7 @@
 use serde_json::json;
 
 use crate::harness::{Outcome, drive};
+use crate::sheet::{KEPT, open_demo};
 
 #[test]
 fn notices_are_hidden_while_all_is_well() -> Outcome {
@@ -61,9 +62,11 @@ fn stopped_page_says_when_there_is_no_stored_sheet() -> Outcome {
 }
 
 #[test]
-fn fault_that_no_hook_reports_is_shown_too() -> Outcome {
+fn fault_that_no_hook_reports_hands_out_the_stored_sheet_too() -> Outcome {
     drive(async |page| {
-        page.open().await?;
+        page.without_file_pickers().await?;
+        open_demo(page).await?;
+        let kept = page.stored(KEPT).await?;
         page.expect_complaint("unreachable");
         // The smallest program that traps: one function whose body is `unreachable`, exported as `f`.
         page.script(
@@ -73,7 +76,35 @@ fn fault_that_no_hook_reports_is_shown_too() -> Outcome {
             &[],
         )
         .await?;
-        page.wait_for_text("#broken-message", "unreachable").await
+        page.wait_for_text("#broken-message", "unreachable").await?;
+        page.click("#broken-save").await?;
+        let saved = page.wait_for_download("ventrail-sheet.json").await?;
+        assert_eq!(Some(saved), kept);
+        assert_eq!(page.stored("ventrail/1/stops").await?.as_deref(), Some("1"));
+        Ok(())
+    })
+}
+
+#[test]
+fn panic_of_the_program_hands_out_the_stored_sheet() -> Outcome {
+    drive(async |page| {
+        page.without_file_pickers().await?;
+        open_demo(page).await?;
+        let kept = page.stored(KEPT).await?;
+        page.expect_complaint("unreachable");
+        // A browser which copies no nodes any more: drawing the next part of the page panics.
+        page.script(
+            "Node.prototype.cloneNode = () => { throw new Error('no copies'); };
+             document.getElementById('add-feeder').click();",
+            &[],
+        )
+        .await?;
+        page.wait_for_text("#broken-message", "panicked").await?;
+        page.click("#broken-save").await?;
+        let saved = page.wait_for_download("ventrail-sheet.json").await?;
+        assert!(kept.is_some_and(|kept| saved.len() >= kept.len()));
+        assert_eq!(page.stored("ventrail/1/stops").await?.as_deref(), Some("1"));
+        Ok(())
     })
 }
 

@@ -42,6 +42,12 @@ fn summary_holds_feeders_heat_airflow_notes_and_cautions() -> Outcome {
                 "Assumed until somebody types it",
                 "Airflow, no credit for the walls",
                 "430.122(A)",
+                // Steps behind a choice and behind a table.
+                "310.15(B)",
+                "250.122(B)",
+                // What was entered and stands in no table.
+                "Shares its raceway with P-111.",
+                "Warmest air at full drive current: 122 °F",
                 "Signature",
                 "End of the summary",
             ] {

@@ -1,7 +1,9 @@
 //! The printed summary: laid out from the sheet as it is when the browser prints, and cleared away afterwards.
 //!
 //! One table holds it all, so that its head, with sheet, issue, date and version, stands on each page. What is printed is
-//! plain markup without signals.
+//! plain markup without signals. Workings stand in their own module.
+
+mod workings;
 
 use super::columns::{conductors, reactor};
 use super::field::stand_in;
@@ -9,20 +11,16 @@ use super::markup::{self, nothing, several, tag};
 use super::names;
 use super::shared::Shared;
 use super::shown::{Holding, Shown, Writing, grade_mark};
-use super::spot::{AirPart, FeederPart, Load, PanelPart, RunPart, Spot, Traced, run_of};
+use super::spot::{AirPart, FeederPart, Load, PanelPart, RunPart, Spot, run_of};
 use super::state::Page;
 use crate::browser::{clock, page as window};
 use crate::sheet::{Document, Home, UnitSystem, fields_of};
 use crate::words::{self, Piece, page};
 use crate::work::{Total, Worked, WorkedFeeder};
-use crate::working::{
-    Amount, Field, Figure, Grade, Holder, Ink, MarginNote, Origin, Place, Run, RunField,
-};
+use crate::working::{Amount, Field, Figure, Grade, Holder, Ink, MarginNote, Place, Run, RunField};
 use leptos::prelude::*;
 use std::any::Any;
 use std::cell::RefCell;
-use std::collections::BTreeSet;
-use std::sync::Arc;
 
 /// The id of the element in which the summary is laid out.
 pub(super) const PAPER: &str = "paper";
@@ -114,6 +112,7 @@ impl Summary {
             self.totals(),
             self.conditions(),
             self.feeders(),
+            self.entered(),
             self.protection(),
             self.heat_of_feeders(),
             self.incoming(),
@@ -278,7 +277,7 @@ impl Summary {
                 (words::head(*field), symbol, !symbol.is_empty())
             })
             .collect();
-        head.push((page::head_heat(), "W", true));
+        head.push((page::head_heat(), page::unit_heat(), true));
         head.push((page::head_margin(), "", false));
         let rows = self.each_feeder(|feeder| {
             let holder = Holder::Feeder(feeder.id);
@@ -316,12 +315,50 @@ impl Summary {
         ])
     }
 
+    /// What was entered for feeders and stands in no table, one paragraph for each. What is assumed is listed apart.
+    fn entered(&self) -> AnyView {
+        let fields: Vec<Field> = fields_of(Home::Feeder)
+            .into_iter()
+            .filter(|field| !stands_in_table(*field))
+            .collect();
+        let lines: Vec<AnyView> = self
+            .document
+            .sheet
+            .feeders
+            .iter()
+            .filter_map(|item| {
+                let holder = Holder::Feeder(item.id);
+                let parts: Vec<String> = fields
+                    .iter()
+                    .filter(|field| item.record.get(**field).is_some())
+                    .map(|field| self.entered_part(holder, *field))
+                    .collect();
+                let named = tag("B").say(format!("{}. ", names::holder(&self.document, holder)));
+                (!parts.is_empty()).then(|| tag("P").with(named).say(parts.join("; ")).done())
+            })
+            .collect();
+        if lines.is_empty() {
+            return nothing();
+        }
+        headed(page::print_entered(), several(lines))
+    }
+
+    fn entered_part(&self, holder: Holder, field: Field) -> String {
+        let place = Place { holder, field };
+        let shown = self
+            .holding(holder)
+            .counting(place, None, Writing::WithUnit);
+        format!("{}: {}", words::label(field), shown.text())
+    }
+
     fn protection(&self) -> AnyView {
         let length = words::field_symbol(Field::Run(Run::Ahead, RunField::Length), self.system);
+        let current = words::field_symbol(Field::DriveInput, self.system);
+        let rating = words::field_symbol(Field::ShortCircuitRating, self.system);
         let head: [Head; 11] = [
             (words::head(Field::Tag), "", false),
             (page::head_device(), "", false),
-            (page::head_disconnect(), "A", true),
+            (page::head_disconnect(), current, true),
             (page::print_run_ahead(), length, true),
             (page::head_conductors(), "", false),
             (page::head_ground(), "", false),
@@ -329,7 +366,7 @@ impl Summary {
             (page::head_conductors(), "", false),
             (page::head_ground(), "", false),
             (page::head_drop(), page::unit_drop(), true),
-            (words::head(Field::ShortCircuitRating), "kA", true),
+            (words::head(Field::ShortCircuitRating), rating, true),
         ];
         let rows = self.each_feeder(|feeder| {
             let mut row = vec![words_cell(self.tag(feeder)), self.device(feeder)];
@@ -383,7 +420,11 @@ impl Summary {
             (words::head(Field::Tag), "", false),
             (page::head_reactor(), page::unit_reactor(), false),
         ];
-        head.extend(parts.iter().map(|(_, name)| (*name, "W", true)));
+        head.extend(
+            parts
+                .iter()
+                .map(|(_, name)| (*name, page::unit_heat(), true)),
+        );
         let rows = self.each_feeder(|feeder| {
             let reactor = reactor(feeder, self.system);
             let mut row = vec![words_cell(self.tag(feeder)), shown_cell(&reactor, false)];
@@ -433,8 +474,8 @@ impl Summary {
         }
         let head: [Head; 3] = [
             ("", "", false),
-            (page::head_running(), "W", true),
-            (page::head_connected(), "W", true),
+            (page::head_running(), page::unit_heat(), true),
+            (page::head_connected(), page::unit_heat(), true),
         ];
         headed(page::heading_ledger(), table(&head, rows))
     }
@@ -451,7 +492,7 @@ impl Summary {
                 (words::head(*field), symbol, !symbol.is_empty())
             })
             .collect();
-        head.push((page::head_heat(), "W", true));
+        head.push((page::head_heat(), page::unit_heat(), true));
         let rows = self
             .document
             .sheet
@@ -573,133 +614,6 @@ impl Summary {
         headed(page::heading_assumptions(), table(&head, rows))
     }
 
-    /// Every figure with its first step; the steps below it stand at the figures they belong to.
-    fn workings(&self) -> AnyView {
-        let mut parts: Vec<AnyView> = Vec::new();
-        for feeder in &self.worked.feeders {
-            let spots = FeederPart::all()
-                .into_iter()
-                .map(|part| (part.name(), part.traced(feeder)))
-                .collect();
-            parts.push(self.chain(self.tag(feeder), spots));
-        }
-        let panel = PanelPart::all()
-            .into_iter()
-            .map(|part| (part.name(), Spot::Panel(part).traced(&self.worked)))
-            .collect();
-        parts.push(self.chain(page::heading_incoming().to_owned(), panel));
-        for (load, counted) in [
-            (Load::Running, page::head_running()),
-            (Load::Connected, page::head_connected()),
-        ] {
-            let ledger = &self.worked.ledger;
-            let mut spots: Vec<(String, Option<Traced>)> = ledger
-                .rows
-                .iter()
-                .map(|row| row.group)
-                .map(|group| {
-                    let spot = Spot::Ledger(Some(group), load);
-                    (
-                        words::ledger_group(group).to_owned(),
-                        spot.traced(&self.worked),
-                    )
-                })
-                .collect();
-            let sum = Spot::Ledger(None, load).traced(&self.worked);
-            spots.push((page::head_total().to_owned(), sum));
-            spots.extend(AirPart::ALL.into_iter().map(|part| {
-                let spot = Spot::Air(load, part);
-                (part.name().to_owned(), spot.traced(&self.worked))
-            }));
-            parts.push(self.chain(page::of_group(page::heading_enclosure(), counted), spots));
-        }
-        headed(
-            page::print_workings(),
-            tag("DIV").class("workings").children(parts).done(),
-        )
-    }
-
-    fn chain(&self, head: String, spots: Vec<(String, Option<Traced>)>) -> AnyView {
-        let mut known = BTreeSet::new();
-        let mut lines: Vec<AnyView> = Vec::new();
-        for (name, traced) in spots {
-            if let Some(Traced {
-                origin: Origin::Figure(figure),
-                ..
-            }) = traced
-            {
-                self.print_steps(&name, &figure, &mut known, &mut lines);
-            }
-        }
-        if lines.is_empty() {
-            return nothing();
-        }
-        several(vec![
-            tag("H3").say(head).done(),
-            tag("UL").children(lines).done(),
-        ])
-    }
-
-    /// A figure under its name, and the figures put into it under the titles of their rules, each once.
-    fn print_steps(
-        &self,
-        name: &str,
-        figure: &Arc<Figure>,
-        known: &mut BTreeSet<String>,
-        lines: &mut Vec<AnyView>,
-    ) {
-        let flat = words::working_flat(figure, self.system);
-        if !known.insert(flat.clone()) {
-            return;
-        }
-        let named = tag("B")
-            .say(name.to_owned())
-            .children(mark(figure.ink))
-            .text(": ");
-        lines.push(
-            tag("LI")
-                .with(named)
-                .children(markup::formula(&flat))
-                .done(),
-        );
-        for term in &figure.terms {
-            if let Origin::Figure(below) = &term.origin
-                && matches!(figure.rule.form, crate::working::Form::Formula { .. })
-            {
-                self.print_steps(words::rule_title(below.rule), below, known, lines);
-            }
-        }
-    }
-
-    fn publications(&self) -> AnyView {
-        let mut names: BTreeSet<String> = BTreeSet::new();
-        let mut collect = |traced: Option<Traced>| {
-            if let Some(Traced {
-                origin: Origin::Figure(figure),
-                ..
-            }) = traced
-            {
-                publications_of(&figure, &mut names);
-            }
-        };
-        for feeder in &self.worked.feeders {
-            for part in FeederPart::all() {
-                collect(part.traced(feeder));
-            }
-        }
-        for part in PanelPart::all() {
-            collect(Spot::Panel(part).traced(&self.worked));
-        }
-        for part in AirPart::ALL {
-            collect(Spot::Air(Load::Running, part).traced(&self.worked));
-        }
-        let names = names.into_iter().map(|name| tag("LI").say(name).done());
-        headed(
-            page::print_sources(),
-            tag("UL").class("publications").children(names).done(),
-        )
-    }
-
     fn each_feeder(&self, row: impl Fn(&WorkedFeeder) -> Vec<Printed>) -> Vec<Vec<Printed>> {
         self.worked
             .feeders
@@ -778,13 +692,19 @@ const fn of_sheet(field: Field) -> Place {
     }
 }
 
-fn publications_of(figure: &Figure, names: &mut BTreeSet<String>) {
-    names.insert(words::source_in_full(figure.rule.source));
-    for term in &figure.terms {
-        if let Origin::Figure(below) = &term.origin {
-            publications_of(below, names);
-        }
-    }
+/// Whether an entered value of a feeder stands in a table as it was entered.
+const fn stands_in_table(field: Field) -> bool {
+    matches!(
+        field,
+        Field::Tag
+            | Field::Load
+            | Field::Running
+            | Field::MotorPower
+            | Field::MotorCurrent
+            | Field::DriveInput
+            | Field::ShortCircuitRating
+            | Field::Run(_, RunField::Length)
+    )
 }
 
 /// The mark of an ink on paper.
