@@ -353,7 +353,7 @@ fn proof_of(id: &str) -> Option<Proof> {
         "physics.circuit.voltage_drop" => {
             Of(&[CURRENT, IMPEDANCE, SHARE, IMPEDANCE, SHARE, LENGTH, COUNT], |t| {
                 circuit::voltage_drop(
-                    circuit::Phases::Three, Current::from_si(t[0]), Ratio::from_si(t[2]),
+                    Current::from_si(t[0]), Ratio::from_si(t[2]),
                     circuit::DropRun {
                         resistance: ImpedancePerLength::from_si(t[1]), reactance: ImpedancePerLength::from_si(t[3]),
                         length: Length::from_si(t[5]), sets: whole(t[6]),
@@ -377,7 +377,7 @@ fn proof_of(id: &str) -> Option<Proof> {
             grounding_of(&conductors, &rating, &mut Vec::new()).into_iter().collect()
         }),
         "physics.circuit.apparent_power" => Of(&[VOLTAGE, CURRENT], |t| {
-            circuit::apparent_power(circuit::Phases::Three, Voltage::from_si(t[0]), Current::from_si(t[1])).si()
+            circuit::apparent_power(Voltage::from_si(t[0]), Current::from_si(t[1])).si()
         }),
         "sizing.reactor.source_ratio" => Through(reactor_figures),
         "physics.circuit.impedance_of_fault_current" => Of(&[SOURCE_POWER, (200.0, 600.0), (1e3, 1e5)], |t| {
@@ -396,14 +396,14 @@ fn proof_of(id: &str) -> Option<Proof> {
             heat::reactor_loss_by_motor(Ratio::from_si(t[0]), ShaftPower::from_si(t[1])).si()
         }),
         "physics.circuit.transformer_current" => Of(&[SOURCE_POWER, VOLTAGE], |t| {
-            circuit::transformer_current(circuit::Phases::Three, ApparentPower::from_si(t[0]), Voltage::from_si(t[1])).si()
+            circuit::transformer_current(ApparentPower::from_si(t[0]), Voltage::from_si(t[1])).si()
         }),
         "physics.circuit.transformer_fault" => Of(&[CURRENT, (0.005, 0.2), (0.5, 1.0)], |t| {
             circuit::transformer_fault_current(Current::from_si(t[0]), Ratio::from_si(t[1]), Ratio::from_si(t[2])).si()
         }),
         "physics.circuit.run_factor" => Of(&[LENGTH, (100.0, 2e5), (50.0, 2e4), COUNT, VOLTAGE], |t| {
             circuit::run_factor(
-                circuit::Phases::Three, Current::from_si(t[1]), Voltage::from_si(t[4]),
+                Current::from_si(t[1]), Voltage::from_si(t[4]),
                 circuit::FaultRun { constant: LengthPerImpedance::from_si(t[2]), length: Length::from_si(t[0]), sets: whole(t[3]) },
             ).si()
         }),

@@ -22,7 +22,7 @@ use std::collections::BTreeSet;
 use std::sync::Arc;
 use ventrail::assume::AssumedValue;
 use ventrail::math::reaches;
-use ventrail::physics::circuit::{DropRun, Phases, voltage_drop};
+use ventrail::physics::circuit::{DropRun, voltage_drop};
 use ventrail::quantity::{
     AirFlow, ApparentPower, Area, CrossSection, Current, Density, Frequency, ImpedancePerLength,
     Inductance, Kind, Length, LengthPerImpedance, Power, Pressure, Quantity, Ratio, ShaftPower,
@@ -903,8 +903,7 @@ fn the_drop_falls_with_the_size_of_the_conductor() {
                             sets: 1,
                         };
                         let power_factor = Ratio::of_one(power_factor);
-                        voltage_drop(Phases::Three, Current::amperes(10.0), power_factor, run)
-                            .to_volts()
+                        voltage_drop(Current::amperes(10.0), power_factor, run).to_volts()
                     })
                     .collect();
                 assert!(drops.len() >= 20);

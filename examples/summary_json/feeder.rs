@@ -87,6 +87,7 @@ struct Device<'a> {
 #[derive(Serialize)]
 struct ReactorLine<'a> {
     reasons: Vec<&'static str>,
+    is_open: bool,
     #[serde(skip_serializing_if = "Option::is_none")]
     source_ratio: Option<Value<'a>>,
     #[serde(skip_serializing_if = "Option::is_none")]
@@ -269,6 +270,7 @@ fn device<'a>(worked: &'a ventrail::sizing::device::Device, writer: Writer) -> D
 fn reactor<'a>(worked: &'a Reactor, writer: Writer) -> ReactorLine<'a> {
     let Reactor {
         reasons,
+        is_open,
         source_ratio,
         source_impedance,
         entered,
@@ -276,6 +278,7 @@ fn reactor<'a>(worked: &'a Reactor, writer: Writer) -> ReactorLine<'a> {
     } = worked;
     ReactorLine {
         reasons: reasons.iter().map(|reason| reason_name(*reason)).collect(),
+        is_open: *is_open,
         source_ratio: writer.maybe(source_ratio.as_ref()),
         source_impedance: writer.maybe(source_impedance.as_ref()),
         entered: entered.as_ref().map(|size| reactor_data(size, writer)),

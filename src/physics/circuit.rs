@@ -9,47 +9,18 @@ use core::f64::consts::PI;
 /// Square root of three: line quantities of a balanced three-phase circuit.
 pub const SQRT_3: f64 = 1.732_050_807_568_877_2;
 
-/// The number of phases of a circuit, as far as the formulas differ.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
-pub enum Phases {
-    /// Two wires, between lines.
-    Single,
-    /// Balanced three-phase.
-    Three,
-}
-
-impl Phases {
-    /// Apparent power for voltage and current: 1, or the square root of three.
-    fn power_factor_of_lines(self) -> f64 {
-        match self {
-            Phases::Single => 1.0,
-            Phases::Three => SQRT_3,
-        }
-    }
-
-    /// Conductor lengths which a drop or a fault between lines sees for a one-way length: 2, or the square root of three.
-    fn lengths_of_lines(self) -> f64 {
-        match self {
-            Phases::Single => 2.0,
-            Phases::Three => SQRT_3,
-        }
-    }
-}
-
-/// Apparent power of a circuit.
+/// Apparent power of a balanced three-phase circuit.
 ///
-/// S = sqrt(3) * U * I for three phases, U * I for one; U voltage between lines, I line current.
-pub fn apparent_power(phases: Phases, voltage: Voltage, current: Current) -> ApparentPower {
-    phases.power_factor_of_lines() * (voltage * current)
+/// S = sqrt(3) * U * I; U voltage between lines, I line current.
+pub fn apparent_power(voltage: Voltage, current: Current) -> ApparentPower {
+    SQRT_3 * (voltage * current)
 }
 
-/// Full-load current of a transformer's winding.
+/// Full-load current of a three-phase transformer's winding.
 ///
-/// I = S / (sqrt(3) * U) for three phases, S / U for one; S rated power, U voltage between lines.
-pub fn transformer_current(phases: Phases, power: ApparentPower, voltage: Voltage) -> Current {
-    Current::amperes(
-        power.to_volt_amperes() / (phases.power_factor_of_lines() * voltage.to_volts()),
-    )
+/// I = S / (sqrt(3) * U); S rated power, U voltage between lines.
+pub fn transformer_current(power: ApparentPower, voltage: Voltage) -> Current {
+    Current::amperes(power.to_volt_amperes() / (SQRT_3 * voltage.to_volts()))
 }
 
 /// Line current which a drive takes to give a motor its rated power.
@@ -82,25 +53,19 @@ pub struct DropRun {
     pub sets: u32,
 }
 
-/// Voltage drop between lines along a run.
+/// Voltage drop between lines along a three-phase run.
 ///
-/// dU = sqrt(3) * I * (R * cosphi + X * sinphi) * L / n for three phases, 2 instead of sqrt(3) for one; I line current,
+/// dU = sqrt(3) * I * (R * cosphi + X * sinphi) * L / n; I line current,
 /// R and X resistance and reactance of one conductor for its length, L length one way, n conductors in parallel.
 /// The usual approximation of the exact difference of magnitudes; it leaves out the angle between the two ends.
 /// Source: NEC 2023, Chapter 9, Table 9, note 2.
-pub fn voltage_drop(
-    phases: Phases,
-    current: Current,
-    power_factor: Ratio,
-    run: DropRun,
-) -> Voltage {
+pub fn voltage_drop(current: Current, power_factor: Ratio, run: DropRun) -> Voltage {
     let cosphi = power_factor.to_one();
     let sinphi = reactive_factor(power_factor).to_one();
     let effective =
         run.resistance.to_ohms_per_metre() * cosphi + run.reactance.to_ohms_per_metre() * sinphi;
     Voltage::volts(
-        phases.lengths_of_lines() * current.to_amperes() * effective * run.length.to_metres()
-            / f64::from(run.sets),
+        SQRT_3 * current.to_amperes() * effective * run.length.to_metres() / f64::from(run.sets),
     )
 }
 
@@ -139,7 +104,7 @@ pub fn impedance_on_base(impedance: Ratio, source: ApparentPower, base: Apparent
 ///
 /// z = S_drive / (sqrt(3) * U * I_sc); U voltage between lines, I_sc fault current of the source.
 pub fn impedance_of_fault_current(base: ApparentPower, voltage: Voltage, fault: Current) -> Ratio {
-    base / apparent_power(Phases::Three, voltage, fault)
+    base / apparent_power(voltage, fault)
 }
 
 /// Fault current at the terminals of a transformer fed from an infinite bus.
@@ -164,12 +129,12 @@ pub struct FaultRun {
 
 /// The factor f of a run: its impedance against that of everything before it.
 ///
-/// f = sqrt(3) * L * I / (C * n * U) for three phases, 2 instead of sqrt(3) for one between lines; L length one way,
+/// f = sqrt(3) * L * I / (C * n * U); L length one way,
 /// I fault current at its start, C constant of the conductor, n conductors in parallel, U voltage between lines.
 /// Source: point-to-point method.
-pub fn run_factor(phases: Phases, at_start: Current, voltage: Voltage, run: FaultRun) -> Ratio {
+pub fn run_factor(at_start: Current, voltage: Voltage, run: FaultRun) -> Ratio {
     Ratio::of_one(
-        phases.lengths_of_lines() * run.length.to_metres() * at_start.to_amperes()
+        SQRT_3 * run.length.to_metres() * at_start.to_amperes()
             / (run.constant.to_metres_per_ohm() * f64::from(run.sets) * voltage.to_volts()),
     )
 }

@@ -1,8 +1,7 @@
 //! Fault current at the panel by the point-to-point method.
 
 use crate::physics::circuit::{
-    FaultRun, Phases, run_factor, run_multiplier, share_of, transformer_current,
-    transformer_fault_current,
+    FaultRun, run_factor, run_multiplier, share_of, transformer_current, transformer_fault_current,
 };
 use crate::quantity::{ApparentPower, Current, Length, Ratio, Voltage, WireSize};
 use crate::sizing::rules;
@@ -71,7 +70,7 @@ const NAMEPLATE_COUNTED: Ratio = Ratio::of_one(0.9);
 pub fn fault_at_panel(input: &FaultInput, notes: &mut Vec<MarginNote>) -> Fault {
     let transformer_figure = input.transformer.as_ref().map(|power| {
         Arc::new(rules::TRANSFORMER_CURRENT.figure(
-            transformer_current(Phases::Three, power.value, input.voltage.value),
+            transformer_current(power.value, input.voltage.value),
             [power.term("S_t"), input.voltage.term("U")],
         ))
     });
@@ -114,7 +113,6 @@ pub fn fault_at_panel(input: &FaultInput, notes: &mut Vec<MarginNote>) -> Fault 
         };
     };
     let factor = run_factor(
-        Phases::Three,
         start.value,
         input.voltage.value,
         FaultRun {

@@ -2,7 +2,7 @@
 
 use crate::math::reaches;
 use crate::physics::circuit::{
-    Phases, apparent_power, impedance_of_fault_current, impedance_on_base, reactor_inductance,
+    apparent_power, impedance_of_fault_current, impedance_on_base, reactor_inductance,
 };
 use crate::physics::heat::reactor_loss_by_motor;
 use crate::quantity::{ApparentPower, Current, Frequency, Power, Ratio, ShaftPower, Voltage};
@@ -113,7 +113,7 @@ pub fn reactor_of(
     notes: &mut Vec<MarginNote>,
 ) -> Reactor {
     let drive_power = Arc::new(rules::DRIVE_APPARENT_POWER.figure(
-        apparent_power(Phases::Three, supply.voltage.value, input.drive_input.value),
+        apparent_power(supply.voltage.value, input.drive_input.value),
         [supply.voltage.term("U"), input.drive_input.term("I_in")],
     ));
     let (source_ratio, source_impedance) = source_figures(&drive_power, supply);

@@ -196,6 +196,7 @@ impl Found {
     fn reactor(&mut self, reactor: &Reactor) {
         let Reactor {
             reasons: _,
+            is_open: _,
             source_ratio,
             source_impedance,
             entered,

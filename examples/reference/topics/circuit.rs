@@ -3,8 +3,7 @@
 use super::{Answers, CONDUITS, Gathered, Inputs, METALS, Topic, Work, conduit, given, metal};
 use crate::reference::keys::{Key, Takes, missing, needed, optional};
 use ventrail::physics::circuit::{
-    FaultRun, Phases, run_factor, run_multiplier, share_of, transformer_current,
-    transformer_fault_current,
+    FaultRun, run_factor, run_multiplier, share_of, transformer_current, transformer_fault_current,
 };
 use ventrail::quantity::{ApparentPower, Current, Kind, Length, Ratio, Voltage};
 use ventrail::sizing::fault::{FaultInput, FaultRunInput, fault_at_panel};
@@ -209,11 +208,7 @@ pub const TOPICS: &[Topic] = &[
 
 fn full_load(inputs: &Inputs) -> Result<Current, String> {
     let power: ApparentPower = inputs.measured("power")?;
-    Ok(transformer_current(
-        Phases::Three,
-        power,
-        inputs.measured("voltage")?,
-    ))
+    Ok(transformer_current(power, inputs.measured("voltage")?))
 }
 
 fn at_transformer(inputs: &Inputs, full_load: Current) -> Result<Current, String> {
@@ -290,7 +285,7 @@ fn work_runs(inputs: &Inputs) -> Result<Answers, String> {
             length,
             sets,
         };
-        let factor = run_factor(Phases::Three, current, voltage, run);
+        let factor = run_factor(current, voltage, run);
         let multiplier = run_multiplier(factor);
         current = share_of(multiplier, current);
         constants.push(constant);

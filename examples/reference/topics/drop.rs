@@ -3,7 +3,7 @@
 use super::conductors::{METAL, SETS, bare_demand, run_of, worked};
 use super::{Answers, CONDUITS, Gathered, Inputs, Topic, Work};
 use crate::reference::keys::{Key, Takes, missing, needed, optional};
-use ventrail::physics::circuit::{DropRun, Phases, voltage_drop};
+use ventrail::physics::circuit::{DropRun, voltage_drop};
 use ventrail::quantity::{CrossSection, ImpedancePerLength, Kind, Ratio, Voltage};
 use ventrail::sizing::conductor::RunInput;
 use ventrail::tables::nec_chapter_9::size_of_area;
@@ -128,7 +128,6 @@ fn work_drop_by_table(inputs: &Inputs) -> Result<Answers, String> {
 
 fn work_drop_by_ohms(inputs: &Inputs) -> Result<Answers, String> {
     let drop = voltage_drop(
-        Phases::Three,
         inputs.measured("current")?,
         inputs.measured_or("power_factor", Ratio::of_one(1.0)),
         DropRun {
@@ -154,7 +153,6 @@ fn work_area_for_drop(inputs: &Inputs) -> Result<Answers, String> {
     let allowed: Voltage = inputs.measured("drop")?;
     let thousand_feet = 1000.0;
     let with_one_mil = voltage_drop(
-        Phases::Three,
         inputs.measured("current")?,
         Ratio::of_one(1.0),
         DropRun {

@@ -1,7 +1,7 @@
 //! What follows from the installed size: voltage drop, and heat where the run lies inside.
 
 use super::{Demand, RunInput, Surrounding};
-use crate::physics::circuit::{DropRun, Phases, reactive_factor, voltage_drop};
+use crate::physics::circuit::{DropRun, reactive_factor, voltage_drop};
 use crate::physics::heat::run_loss;
 use crate::quantity::{Power, WireSize};
 use crate::sizing::rules;
@@ -37,7 +37,6 @@ pub(super) fn drop_of(
         rules::REACTIVE_FACTOR.figure(reactive_factor(cosphi.value), [cosphi.term("cosphi")]),
     );
     let drop = voltage_drop(
-        Phases::Three,
         demand.carried.value,
         cosphi.value,
         DropRun {
