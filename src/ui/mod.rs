@@ -48,6 +48,9 @@ pub fn start() {
     window::focus(PAD);
 }
 
+/// Where the working strip belongs to: a single letter is a command there alone, lest a spoken word be taken for one.
+const READ_FROM: &str = "#strip, .grid, .ledger, .totals, .figures";
+
 /// The id of the part which scrolls.
 const PAD: &str = "pad";
 
@@ -169,7 +172,9 @@ fn on_key(page: Page, event: &Event) {
         _ if window::is_entering() => return,
         ("z", true, false) => page.undo(),
         ("y", true, false) | ("z", true, true) => page.redo(),
-        ("p", false, false) if !key.alt => strip::pin(page),
+        ("p", false, false) if !key.alt && window::focused_within(READ_FROM).is_some() => {
+            strip::pin(page);
+        }
         _ => return,
     }
     event.prevent_default();

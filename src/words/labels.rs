@@ -4,6 +4,14 @@ use crate::sheet::Choice;
 use crate::work::{LedgerGroup, TotalKind, Verdict};
 use crate::working::{Field, Grade, Ink, Known, Run, RunField};
 
+/// The label of a field of a run in two: the run, and what is said of it.
+pub fn label_in_run(field: Field) -> Option<(&'static str, &'static str)> {
+    match field {
+        Field::Run(..) => label(field).split_once(", "),
+        _ => None,
+    }
+}
+
 /// The name of a field in a form, in a refusal, in the list of assumptions.
 pub const fn label(field: Field) -> &'static str {
     match field {

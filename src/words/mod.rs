@@ -26,8 +26,8 @@ pub use entries::{
     assumed_with_unit, assumption_lines, assumption_reason, entry, entry_to_edit, entry_with_unit,
 };
 pub use labels::{
-    choice, grade, grade_meaning, head, ink, known, label, ledger_group, limit, run, run_field,
-    run_where, total, verdict,
+    choice, grade, grade_meaning, head, ink, known, label, label_in_run, ledger_group, limit, run,
+    run_field, run_where, total, verdict,
 };
 pub use notes::{NoteWords, memory_table, note, place, place_in_full, reactor_reason};
 pub use outcomes::{

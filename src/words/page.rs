@@ -283,13 +283,15 @@ texts! {
 pub const fn grid_keys() -> &'static [(&'static str, &'static str)] {
     &[
         ("Arrow keys", "move to the next cell"),
-        (
-            "Tab, Shift+Tab",
-            "next cell, previous cell; out of the list at its ends",
-        ),
+        ("Page Up, Page Down", "move ten rows up, ten rows down"),
+        ("Tab, Shift+Tab", "leave the list"),
         (
             "Enter, F2",
             "edit the cell; Enter again takes the value and moves down",
+        ),
+        (
+            "Tab, Shift+Tab in an edit",
+            "take the value and go to the next cell, to the one before",
         ),
         ("Escape", "give up the edit, the old value stays"),
         ("typing", "replace the value"),
@@ -314,7 +316,10 @@ pub const fn page_keys() -> &'static [(&'static str, &'static str)] {
         ("Ctrl+O", "open a file"),
         ("Ctrl+P", "print the summary"),
         ("F8, Shift+F8", "next margin note; back to the one before"),
-        ("P", "pin the working in the strip below, or let it go"),
+        (
+            "P",
+            "on a worked figure or in the strip below: pin the working there, or let it go",
+        ),
     ]
 }
 

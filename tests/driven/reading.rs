@@ -26,6 +26,17 @@ fn working_of_the_figure_under_the_cursor_is_read_and_pinned() -> Outcome {
         );
         page.press("p").await?;
         page.wait_for_text("#strip .read", "P-102").await?;
+        // Elsewhere the letter does nothing.
+        let pinned =
+            async || -> Outcome<bool> { Ok(!page.find_all("#strip.pinned").await?.is_empty()) };
+        page.click("#toggle-cautions").await?;
+        page.press("p").await?;
+        assert!(!pinned().await?);
+        page.click(".totals tbody tr:first-child .figure").await?;
+        page.press("p").await?;
+        assert!(pinned().await?);
+        page.press("p").await?;
+        assert!(!pinned().await?);
         // Totals and the ledger are read the same way.
         page.click(".totals tbody tr:first-child .figure").await?;
         page.wait_for_text("#strip .read", "Heat inside").await?;

@@ -317,10 +317,12 @@ impl Summary {
 
     /// What was entered for feeders and stands in no table, one paragraph for each. What is assumed is listed apart.
     fn entered(&self) -> AnyView {
-        let fields: Vec<Field> = fields_of(Home::Feeder)
+        let mut fields: Vec<Field> = fields_of(Home::Feeder)
             .into_iter()
             .filter(|field| !stands_in_table(*field))
             .collect();
+        // A remark ends with a full stop of its own.
+        fields.sort_by_key(|field| *field == Field::FeederRemark);
         let lines: Vec<AnyView> = self
             .document
             .sheet
@@ -328,13 +330,12 @@ impl Summary {
             .iter()
             .filter_map(|item| {
                 let holder = Holder::Feeder(item.id);
-                let parts: Vec<String> = fields
+                let entered = fields
                     .iter()
-                    .filter(|field| item.record.get(**field).is_some())
-                    .map(|field| self.entered_part(holder, *field))
-                    .collect();
+                    .filter(|field| item.record.get(**field).is_some());
+                let line = self.entered_line(holder, entered);
                 let named = tag("B").say(format!("{}. ", names::holder(&self.document, holder)));
-                (!parts.is_empty()).then(|| tag("P").with(named).say(parts.join("; ")).done())
+                (!line.is_empty()).then(|| tag("P").with(named).say(line).done())
             })
             .collect();
         if lines.is_empty() {
@@ -343,12 +344,26 @@ impl Summary {
         headed(page::print_entered(), several(lines))
     }
 
-    fn entered_part(&self, holder: Holder, field: Field) -> String {
-        let place = Place { holder, field };
-        let shown = self
-            .holding(holder)
-            .counting(place, None, Writing::WithUnit);
-        format!("{}: {}", words::label(field), shown.text())
+    /// Fields with their values; those of one run share its name.
+    fn entered_line<'a>(&self, holder: Holder, fields: impl Iterator<Item = &'a Field>) -> String {
+        let mut line = String::new();
+        let mut run = None;
+        for field in fields.copied() {
+            let place = Place { holder, field };
+            let shown = self
+                .holding(holder)
+                .counting(place, None, Writing::WithUnit);
+            let of_run = words::label_in_run(field);
+            let joint = if line.is_empty() { "" } else { "; " };
+            let text = match of_run {
+                Some((name, part)) if run == Some(name) => format!(", {part} {}", shown.text()),
+                Some((name, part)) => format!("{joint}{name}: {part} {}", shown.text()),
+                None => format!("{joint}{}: {}", words::label(field), shown.text()),
+            };
+            line.push_str(&text);
+            run = of_run.map(|(name, _)| name);
+        }
+        line
     }
 
     fn protection(&self) -> AnyView {

@@ -26,17 +26,21 @@ struct Steps {
 impl Steps {
     /// One part: its figures, each once, and the steps below them which are new on the sheet.
     fn part(&mut self, head: String, figures: Vec<Named>) -> AnyView {
-        let mut lines = Vec::new();
-        let mut named = BTreeSet::new();
-        for (name, traced) in figures {
-            if let Some(figure) = traced.and_then(figure_of) {
+        let mut known = BTreeSet::new();
+        let named: Vec<(String, Arc<Figure>, String)> = figures
+            .into_iter()
+            .filter_map(|(name, traced)| {
+                let figure = figure_of(traced?)?;
                 let flat = words::working_flat(&figure, self.system);
-                if named.insert(flat.clone()) {
-                    self.printed.insert(flat.clone());
-                    lines.push(line(&name, &figure, &flat));
-                    self.below(&figure, &mut lines);
-                }
-            }
+                known.insert(flat.clone()).then_some((name, figure, flat))
+            })
+            .collect();
+        // Before any step is printed: what has a name of its own comes up under it.
+        self.printed.append(&mut known);
+        let mut lines = Vec::new();
+        for (name, figure, flat) in named {
+            lines.push(line(&name, &figure, &flat));
+            self.below(&figure, &mut lines);
         }
         if lines.is_empty() {
             return nothing();
