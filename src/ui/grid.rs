@@ -13,7 +13,7 @@ use super::spot;
 use super::state::Page;
 use crate::browser::page as window;
 use crate::sheet::{Document, Drafts, Item, Shape, UnitSystem, spec};
-use crate::words::{self, page};
+use crate::words::page;
 use crate::work::WorkedFeeder;
 use crate::working::{Grade, Holder, HolderId, Place};
 use leptos::prelude::*;
@@ -21,6 +21,10 @@ use std::collections::BTreeMap;
 
 /// The id of the control in which a cell is edited.
 pub(super) const EDITOR: &str = "cell-editor";
+
+/// The id of the text which says why what is edited was refused before. It stands beside the grid: a cell being edited
+/// holds its control alone.
+const EDITOR_WHY: &str = "cell-editor-why";
 
 /// A cell of the grid.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -170,6 +174,16 @@ pub(super) fn grid(page: Page) -> AnyView {
             .id("grid-help")
             .class("help")
             .text(page::grid_help())
+            .done(),
+        tag("P")
+            .id(EDITOR_WHY)
+            .class("unseen")
+            .live_text(move || {
+                page.editing.with(|editing| {
+                    let refused = editing.as_ref().and_then(|editing| why(page, editing));
+                    refused.unwrap_or_default()
+                })
+            })
             .done(),
     ])
 }
@@ -371,7 +385,10 @@ fn cell_view(page: Page, cell: Cell, shown: &Shown, row: &Row, class: &str) -> A
         .put("id", id)
         .set("tabindex", "-1")
         .maybe("aria-invalid", of_why("true"))
-        .maybe("aria-describedby", of_why(&why_id));
+        .maybe(
+            "aria-describedby",
+            of_why(&why_id).filter(|_| editing.is_none()),
+        );
     match editing {
         Some(editing) => element.child(editor(page, editing)),
         None => element.children(cell_content(cell, shown, row, why.map(|why| (why_id, why)))),
@@ -412,14 +429,26 @@ fn cell_content(
     content
 }
 
+/// Why the text with which an edit began was refused; what is typed anew has not been refused yet.
+fn why(page: Page, editing: &Editing) -> Option<String> {
+    let system = untrack(|| page.system());
+    let draft = page.peek(|document| document.drafts.get(&editing.place).cloned())?;
+    (editing.how == How::Whole).then(|| why_refused(editing.place.field, &draft, system))
+}
+
 /// The control in which a cell is edited.
 fn editor(page: Page, editing: &Editing) -> AnyView {
     let place = editing.place;
     let shape = spec(place.field).shape;
+    let name = page.peek(|document| spot::Spot::Field(place).name(document));
+    let is_refused = why(page, editing).is_some();
+    let of_why = |value: &str| is_refused.then(|| value.to_owned());
     let named = |control: Markup| {
         control
             .id(EDITOR)
-            .set("aria-label", words::label(place.field))
+            .put("aria-label", name)
+            .maybe("aria-invalid", of_why("true"))
+            .maybe("aria-describedby", of_why(EDITOR_WHY))
     };
     if let (How::List, Shape::Choice(offered)) = (editing.how, shape) {
         let picked = page.peek(|document| {

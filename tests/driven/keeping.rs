@@ -41,6 +41,14 @@ fn refused_text_stays_with_its_reason_and_outlives_a_reload() -> Outcome {
         // Typed rightly, it is taken.
         page.click(&place).await?;
         page.press(Key::Enter).await?;
+        // The control in which it opens again says the same, and of which feeder.
+        let editor = page.find("#cell-editor[aria-invalid=true]").await?;
+        let reason = editor.attr("aria-describedby").await?.unwrap_or_default();
+        let script = "return document.getElementById(arguments[0]).textContent";
+        let reason = page.script(script, &[json!(reason)]).await?;
+        assert!(reason.to_string().contains("measures something else"));
+        let name = editor.attr("aria-label").await?.unwrap_or_default();
+        assert!(name.starts_with(&tags(page).await?[3]), "{name}");
         page.press(Key::Control + "a").await?;
         page.press("22").await?;
         page.press(Key::Enter).await?;
