@@ -124,6 +124,10 @@ fn answer(mut visitor: TcpStream, notes: &Mutex<Notes>) -> io::Result<()> {
     );
     let extra = {
         let mut notes = hold(notes);
+        // A connection which the browser opened ahead of need outlives the listener, but not the server.
+        if notes.is_closing {
+            return Ok(());
+        }
         notes.requests.push(format!("{method} {path}"));
         notes.extras.get(path).cloned()
     };
