@@ -49,7 +49,7 @@ pub fn start() {
 }
 
 /// Where the working strip belongs to: a single letter is a command there alone, lest a spoken word be taken for one.
-const READ_FROM: &str = "#strip, .grid, .ledger, .totals, .figures";
+const READ_FROM: [&str; 5] = ["#strip", ".grid", ".ledger", ".totals", ".figures"];
 
 /// The id of the part which scrolls.
 const PAD: &str = "pad";
@@ -157,6 +157,12 @@ fn watch(page: Page) {
     });
 }
 
+fn is_read_from() -> bool {
+    READ_FROM
+        .into_iter()
+        .any(|part| window::focused_within(part).is_some())
+}
+
 /// Keys which work everywhere.
 fn on_key(page: Page, event: &Event) {
     let Some(key) = window::key(event) else {
@@ -172,7 +178,7 @@ fn on_key(page: Page, event: &Event) {
         _ if window::is_entering() => return,
         ("z", true, false) => page.undo(),
         ("y", true, false) | ("z", true, true) => page.redo(),
-        ("p", false, false) if !key.alt && window::focused_within(READ_FROM).is_some() => {
+        ("p", false, false) if !key.alt && is_read_from() => {
             strip::pin(page);
         }
         _ => return,
