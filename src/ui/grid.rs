@@ -8,7 +8,7 @@ use super::field::{keypad, options, shown, unchosen, why_refused};
 use super::keys;
 use super::markup::{Markup, each, live, nothing, several, tag, unseen};
 use super::shared::Shared;
-use super::shown::{Holding, Shown, Writing, grade_mark, grades};
+use super::shown::{Holding, Shown, Writing, grade_mark};
 use super::spot;
 use super::state::Page;
 use crate::browser::page as window;
@@ -239,6 +239,7 @@ struct Drawn {
     item: Shared<Item>,
     feeder: Shared<WorkedFeeder>,
     drafts: Drafts,
+    grades: Vec<Grade>,
     system: UnitSystem,
     /// The cell being edited, where it is in this row.
     editing: Option<Editing>,
@@ -277,6 +278,7 @@ impl Drawn {
             item,
             feeder,
             drafts,
+            grades: page.notes.with(|notes| notes.grades_at(holder)),
             system: page.system(),
             editing: page
                 .editing
@@ -306,14 +308,9 @@ impl Drawn {
                 _ => None,
             })
             .collect();
-        let mut grades = grades(self.feeder.notes.iter());
-        if !self.drafts.is_empty() && !grades.contains(&Grade::Query) {
-            grades.push(Grade::Query);
-            grades.sort();
-        }
         Row {
             cells,
-            grades,
+            grades: self.grades.clone(),
             refusals,
             editing: self.editing.clone(),
         }

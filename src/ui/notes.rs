@@ -4,7 +4,7 @@ use crate::file;
 use crate::sheet::NoteRef;
 use crate::words::page;
 use crate::working::{Grade, Holder, MarginNote, Place};
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 /// Names a margin note on the page. Notes of one kind at one place are counted.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash)]
@@ -19,6 +19,7 @@ pub(super) struct Key {
 pub(super) struct Notes {
     list: Vec<(Key, MarginNote)>,
     by_key: BTreeMap<Key, usize>,
+    grades: BTreeMap<Holder, BTreeSet<Grade>>,
 }
 
 impl Key {
@@ -48,6 +49,7 @@ impl Notes {
         notes.sort_by_key(|note| note.grade);
         let mut counts: BTreeMap<(Place, &'static str), usize> = BTreeMap::new();
         let mut by_key = BTreeMap::new();
+        let mut grades: BTreeMap<Holder, BTreeSet<Grade>> = BTreeMap::new();
         let list = notes
             .into_iter()
             .enumerate()
@@ -61,10 +63,24 @@ impl Notes {
                 };
                 *known += 1;
                 by_key.insert(key, position);
+                grades
+                    .entry(note.place.holder)
+                    .or_default()
+                    .insert(note.grade);
                 (key, note)
             })
             .collect();
-        Self { list, by_key }
+        Self {
+            list,
+            by_key,
+            grades,
+        }
+    }
+
+    /// The grades of what is noted at a feeder or source, gravest first: those of the sheet's own rules too.
+    pub(super) fn grades_at(&self, holder: Holder) -> Vec<Grade> {
+        let grades = self.grades.get(&holder).into_iter().flatten();
+        grades.copied().collect()
     }
 
     /// Each with its name.

@@ -50,7 +50,7 @@ pub struct WorkingLine {
 /// Steps after which a chain is cut: a sum over hundreds of feeders is read at the feeders.
 const MOST_LINES: usize = 120;
 /// Parts of a sum which are written out.
-const MOST_PARTS: usize = 12;
+const MOST_PARTS: usize = 60;
 
 /// The value of a figure with its unit; shares in per cent.
 pub fn figure(figure: &Figure, system: UnitSystem) -> String {
