@@ -2,7 +2,7 @@
 //!
 //! Here: entries of a record become typed values with their origin. Not here: choices between rules, and the drive's
 //! rated input current and the losses, which are assumed by rules with a working of their own (`sizing`).
-//! Start with [`site`] and [`feeder`].
+//! Start with [`site()`] and [`feeder()`].
 
 mod feeder;
 mod reader;

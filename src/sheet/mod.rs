@@ -1,6 +1,6 @@
 //! The sheet: what the person enters and what is saved. Plain data, edits, and history.
 //!
-//! Here: fields with their shapes and ranges ([`spec`]), entries, the sheet, its document with drafts and answers,
+//! Here: fields with their shapes and ranges ([`spec()`]), entries, the sheet, its document with drafts and answers,
 //! edits and undo. Not here: results, parsing of typed text (`entry`), the saved format (`file`).
 //! Start with [`Sheet`].
 
