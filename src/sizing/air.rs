@@ -80,20 +80,11 @@ pub struct AirInput {
 /// With fans the inside is taken at the limit which they are to hold; sealed, at the rise of the linear rule. No airflow
 /// is given where the limit is not above the inlet.
 pub fn air_of(input: &AirInput) -> Air {
-    let (surface, conductance) = match &input.walls {
-        Some(walls) => {
-            let (surface, conductance) = conductance_of(walls);
-            (Some(surface), conductance)
-        }
-        None => (None, None),
-    };
+    let (surface, conductance) = input.walls.as_ref().map(conductance_of).unzip();
     let sealed = conductance
         .as_ref()
         .and_then(|conductance| sealed_of(input, conductance));
-    let (sealed_rise, sealed_inside) = match sealed {
-        Some((rise, inside)) => (Some(rise), Some(inside)),
-        None => (None, None),
-    };
+    let (sealed_rise, sealed_inside) = sealed.unzip();
     let inside = if input.is_ventilated {
         Some(input.limit.clone())
     } else {
@@ -110,7 +101,7 @@ pub fn air_of(input: &AirInput) -> Air {
     }
 }
 
-fn conductance_of(walls: &Walls) -> (Arc<Figure>, Option<Arc<Figure>>) {
+fn conductance_of(walls: &Walls) -> (Arc<Figure>, Arc<Figure>) {
     let factors = walls.mounting.factors();
     let sides = Ratio::of_one(factors.left.to_one() + factors.right.to_one());
     let area = effective_surface(
@@ -142,7 +133,7 @@ fn conductance_of(walls: &Walls) -> (Arc<Figure>, Option<Arc<Figure>>) {
         wall_conductance(walls.coefficient.value, area),
         [walls.coefficient.term("k"), Term::of("A", &surface)],
     );
-    (surface, Some(Arc::new(conductance)))
+    (surface, Arc::new(conductance))
 }
 
 fn sealed_of(input: &AirInput, conductance: &Arc<Figure>) -> Option<(Arc<Figure>, Arc<Figure>)> {

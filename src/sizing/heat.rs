@@ -58,42 +58,21 @@ pub fn loss_inside(loss: &Given<Power>, share_outside: &Given<Ratio>) -> Arc<Fig
     ))
 }
 
-/// The device limits which were used, for the one `query` of each table.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
-pub enum LossTable {
-    /// IEC 60898-1.
-    Breaker,
-    /// IEC 60269-2.
-    Fuse,
-}
-
-/// Loss of a three-pole device: as entered, else from the largest loss at its rating, by the square of current.
+/// Loss of a three-pole device without data, assumed from the largest loss at its rating, by the square of current.
 ///
-/// `None` where neither is known. The second value names the table which was used.
-pub fn device_loss(
-    entered: Option<Given<Power>>,
+/// `None` where no limit is known for such a rating.
+pub fn assumed_device_loss(
     device: DeviceType,
     rating: &Given<Current>,
     current: &Given<Current>,
-) -> (Option<Given<Power>>, Option<LossTable>) {
-    if entered.is_some() {
-        return (entered, None);
-    }
-    let (limit, table, rule): (_, _, &'static Rule) = match device {
-        DeviceType::InverseTimeBreaker => (
-            breaker_pole(rating.value),
-            LossTable::Breaker,
-            &rules::BREAKER_LOSS_LIMIT,
-        ),
-        DeviceType::TimeDelayFuse | DeviceType::NontimeDelayFuse | DeviceType::ClassCcFuse => (
-            fuse_link(rating.value),
-            LossTable::Fuse,
-            &rules::FUSE_LOSS_LIMIT,
-        ),
+) -> Option<Given<Power>> {
+    let (limit, rule): (_, &'static Rule) = match device {
+        DeviceType::InverseTimeBreaker => (breaker_pole(rating.value), &rules::BREAKER_LOSS_LIMIT),
+        DeviceType::TimeDelayFuse | DeviceType::NontimeDelayFuse | DeviceType::ClassCcFuse => {
+            (fuse_link(rating.value), &rules::FUSE_LOSS_LIMIT)
+        }
     };
-    let Some(limit) = limit else {
-        return (None, None);
-    };
+    let limit = limit?;
     let limit_figure = Arc::new(rule.figure(
         limit.loss,
         [rating.term("I_n"), Term::constant("up to", limit.up_to)],
@@ -107,7 +86,7 @@ pub fn device_loss(
             rating.term("I_n"),
         ],
     );
-    (Given::from_figure(&Arc::new(figure)), Some(table))
+    Given::from_figure(&Arc::new(figure))
 }
 
 const POLES: u32 = 3;

@@ -9,7 +9,7 @@ use crate::sizing::conductor::{Conductors, demand_of, size_run};
 use crate::sizing::current::{DriveInputBasis, drive_input, motor_full_load};
 use crate::sizing::device::{Device, DeviceInput, disconnect, size_branch_device};
 use crate::sizing::grounding::grounding_of;
-use crate::sizing::heat::{FeederHeat, device_loss, drive_loss, loss_inside, sum_of_heats};
+use crate::sizing::heat::{FeederHeat, assumed_device_loss, drive_loss, loss_inside, sum_of_heats};
 use crate::sizing::panel::FeederLoad;
 use crate::sizing::reactor::{Reactor, ReactorInput, Reference, reactor_of};
 use crate::sizing::rules;
@@ -346,12 +346,8 @@ fn heat_of(
         basis.drive_input,
     ) {
         (Some(rating), Some(current)) => {
-            let (loss, _) = device_loss(
-                inputs.device_loss.clone(),
-                inputs.device.value,
-                rating,
-                current,
-            );
+            let assumed = || assumed_device_loss(inputs.device.value, rating, current);
+            let loss = inputs.device_loss.clone().or_else(assumed);
             if loss.is_none() {
                 notes.push(MarginNote::new(
                     Grade::Query,
@@ -419,13 +415,5 @@ impl WorkedFeeder {
     /// The runs of the feeder which were worked.
     pub fn runs(&self) -> impl Iterator<Item = &Conductors> {
         [&self.ahead, &self.behind].into_iter().flatten()
-    }
-
-    /// The heat of everything of this feeder inside.
-    pub fn heat_inside(&self) -> Option<Power> {
-        match self.heat.total.as_deref()?.value {
-            Amount::Measured { si, .. } => Some(Power::watts(si)),
-            _ => None,
-        }
     }
 }

@@ -5,7 +5,7 @@ use super::{WorkedFeeder, WorkedSource};
 use crate::assume::SheetInputs;
 use crate::quantity::{Current, Power};
 use crate::sizing::fault::{Fault, FaultInput, FaultRunInput, fault_at_panel};
-use crate::sizing::heat::device_loss;
+use crate::sizing::heat::assumed_device_loss;
 use crate::sizing::panel::{
     FeederLoad, IncomingCircuit, IncomingInput, OtherLoad, incoming_circuit,
 };
@@ -72,7 +72,7 @@ pub(super) fn main_loss(
         main.rating.as_ref()?,
         Given::from_figure(incoming.running.as_ref()?)?,
     );
-    let (loss, _) = device_loss(None, main.device.value, rating, &current);
+    let loss = assumed_device_loss(main.device.value, rating, &current);
     if loss.is_none() {
         notes.push(MarginNote::new(
             Grade::Query,

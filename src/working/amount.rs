@@ -20,6 +20,16 @@ pub enum Amount {
     Size(WireSize),
 }
 
+impl Amount {
+    /// The amount as a quantity of the kind asked for; `None` where it is of another kind.
+    pub fn quantity<Q: Quantity>(self) -> Option<Q> {
+        match self {
+            Amount::Measured { si, kind } if kind == Q::KIND => Some(Q::from_si(si)),
+            _ => None,
+        }
+    }
+}
+
 impl<Q: Quantity> From<Q> for Amount {
     fn from(quantity: Q) -> Self {
         Amount::Measured {
@@ -136,10 +146,7 @@ pub struct Figure {
 impl Figure {
     /// The value as a quantity of the kind asked for; `None` where the figure is of another kind.
     pub fn quantity<Q: Quantity>(&self) -> Option<Q> {
-        match self.value {
-            Amount::Measured { si, kind } if kind == Q::KIND => Some(Q::from_si(si)),
-            _ => None,
-        }
+        self.value.quantity()
     }
 
     /// Whether anything below this figure, or itself, is assumed.

@@ -2,12 +2,12 @@
 
 use super::{RunInput, Surrounding, Terminal};
 use crate::math::reaches;
-use crate::quantity::{Current, Quantity, Ratio, Temperature, WireSize};
+use crate::quantity::{Current, Ratio, Temperature, WireSize};
 use crate::sizing::rules;
 use crate::tables::nec_conductors::{ambient_factor, ampacity_row, count_factor};
 use crate::tables::ul_508a::inside_row;
 use crate::tables::{Column, Metal};
-use crate::working::{Amount, Figure, Term};
+use crate::working::{Figure, Term};
 use std::sync::Arc;
 
 /// Above this required ampacity unmarked terminals are read at 75 °C. Source: NEC 2023, 110.14(C)(1); UL 508A, 29.6.
@@ -98,7 +98,8 @@ fn corrected(input: &RunInput, size: WireSize) -> Result<Option<Arc<Figure>>, Si
             (ambient.term("T_a"), Term::of("k_c", &Arc::new(figure)))
         }
     };
-    let (Some(temperature), Some(count_ratio)) = (measured(&ambient), measured::<Ratio>(&count))
+    let (Some(temperature), Some(count_ratio)) =
+        (ambient.amount.quantity(), count.amount.quantity::<Ratio>())
     else {
         return Ok(None);
     };
@@ -140,13 +141,6 @@ fn corrected(input: &RunInput, size: WireSize) -> Result<Option<Arc<Figure>>, Si
 
 /// The ambient for which Tables 310.16 and 28.1 are printed.
 pub(super) const BASE_AMBIENT: Temperature = Temperature::celsius(30.0);
-
-fn measured<Q: Quantity>(term: &Term) -> Option<Q> {
-    match term.amount {
-        Amount::Measured { si, kind } if kind == Q::KIND => Some(Q::from_si(si)),
-        _ => None,
-    }
-}
 
 /// The usable ampacity of a size: the smaller of its two ampacities.
 pub(super) fn usable(input: &RunInput, needed: Current, size: WireSize) -> Option<Arc<Figure>> {
